@@ -1,0 +1,3 @@
+declare const __APP_VERSION__: string;
+
+declare namespace App {}

@@ -1,0 +1,17 @@
+import { readFileSync } from 'node:fs';
+import { sveltekit } from '@sveltejs/kit/vite';
+import { defineConfig } from 'vitest/config';
+
+const { version } = JSON.parse(readFileSync(new URL('package.json', import.meta.url), 'utf8')) as { version: string };
+
+export default defineConfig({
+  plugins: [sveltekit()],
+  define: { __APP_VERSION__: JSON.stringify(version) },
+  worker: { format: 'es' },
+  build: { target: 'es2023' },
+  test: {
+    include: ['test/**/*.test.ts'],
+    environment: 'node',
+    testTimeout: 30_000
+  }
+});
