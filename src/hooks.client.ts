@@ -1,0 +1,17 @@
+/**
+ * Trusted Types: the only script addresses this program ever loads by string are its own service worker and its own
+ * workers. The default policy lets these through and refuses everything else.
+ */
+interface PolicyFactory {
+  createPolicy(name: 'default', rules: { createScriptURL(url: string): string }): unknown;
+}
+
+const factory = (globalThis as { trustedTypes?: PolicyFactory }).trustedTypes;
+factory?.createPolicy('default', {
+  createScriptURL(address) {
+    const url = new URL(address, location.href);
+    const own = url.origin === location.origin && /(^|\/)(_app\/immutable\/|service-worker\.js$)/.test(url.pathname);
+    if (!own) throw new TypeError(`refused to load a script from ${url.href}`);
+    return address;
+  }
+});
