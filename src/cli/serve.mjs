@@ -34,13 +34,28 @@ const types = {
 /**
  * Serves a built app: files as they are, every other path with the fallback page, as a static host is to be set up.
  * @param {string} folder
+ * @param {(path: string) => string | 'missing' | null} [instead] another body for a path, or a 404; null: the file
  * @returns {import('node:http').Server}
  */
-export function serveFolder(folder) {
+export function serveFolder(folder, instead = () => null) {
   return createServer((request, response) => {
     const path = decodePath(request.url ?? '/');
     if (path === null) {
       response.writeHead(400, productionHeaders).end();
+      return;
+    }
+    const other = instead(path);
+    if (other === 'missing') {
+      response.writeHead(404, productionHeaders).end();
+      return;
+    }
+    if (other !== null) {
+      response.writeHead(200, {
+        ...productionHeaders,
+        'Content-Type': types[extname(path)] ?? '',
+        'Cache-Control': 'no-cache'
+      });
+      response.end(other);
       return;
     }
     let file = join(folder, normalize(path));

@@ -8,6 +8,8 @@ export interface AppServer {
   readonly origin: string;
   stop(): Promise<void>;
   start(): Promise<void>;
+  /** From now on answers a path with another body, or with 404; null: with the file. */
+  answerInstead(instead: (path: string) => string | 'missing' | null): void;
 }
 
 interface Fixtures {
@@ -25,14 +27,19 @@ const stopServer = (server: Server): Promise<void> =>
 export const test = base.extend<Fixtures>({
   app: async ({ baseURL: _ }, use) => {
     const folder = `${process.cwd()}/${process.env.BUILD_DIR ?? 'build'}`;
-    let server = serveFolder(folder);
+    let instead: (path: string) => string | 'missing' | null = () => null;
+    const make = () => serveFolder(folder, (path) => instead(path));
+    let server = make();
     const port = await listen(server, 0);
     await use({
       origin: `http://localhost:${port}`,
       stop: () => stopServer(server),
       start: async () => {
-        server = serveFolder(folder);
+        server = make();
         await listen(server, port);
+      },
+      answerInstead: (next) => {
+        instead = next;
       }
     });
     await stopServer(server);
