@@ -64,6 +64,7 @@ export function run(session: string, slot: number, specimen: string, over: Parti
     ruined: null,
     ruinHistory: [],
     notes: [],
+    earlier: [],
     ...over
   };
 }

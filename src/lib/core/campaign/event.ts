@@ -10,6 +10,8 @@ import { IssuedPlanSchema, PlannedSessionSchema, PlanSchema } from './plan.ts';
 
 const text = (most: number) => v.pipe(v.string(), v.maxLength(most));
 const uuid = v.pipe(v.string(), v.regex(/^[0-9a-f]{8}-[0-9a-f]{4}-7[0-9a-f]{3}-[89ab][0-9a-f]{3}-[0-9a-f]{12}$/));
+/** Ticks end with the year 2200, so that nobody's file can push the counter out of the exact integers. */
+export const lastTick = 7_258_118_400_000;
 const finite = v.pipe(v.number(), v.finite());
 const natural = v.pipe(v.number(), v.integer(), v.minValue(0), v.maxValue(1e9));
 const sessionId = text(40);
@@ -114,8 +116,20 @@ export const kinds = {
   undone: v.strictObject({ target: uuid, reason: text(1000) }),
   'session-closed': v.strictObject({ session: sessionId }),
   'session-reopened': v.strictObject({ session: sessionId, reason }),
-  'contradiction-decided': v.strictObject({ about: text(300), chosen: uuid, reason }),
-  exported: v.strictObject({ events: natural, sha256: v.pipe(v.string(), v.regex(/^[0-9a-f]{64}$/)), how: text(40) }),
+  'contradiction-decided': v.strictObject({
+    about: text(300),
+    chosen: uuid,
+    reason,
+    /** The events that were weighed; a contradicting event that is not among them opens the question again. */
+    among: v.exactOptional(v.pipe(v.array(uuid), v.maxLength(1000)))
+  }),
+  exported: v.strictObject({
+    events: natural,
+    sha256: v.pipe(v.string(), v.regex(/^[0-9a-f]{64}$/)),
+    how: text(40),
+    /** Sequence number of this device's last event in the file. */
+    upTo: v.exactOptional(natural)
+  }),
   imported: v.strictObject({
     sha256: v.pipe(v.string(), v.regex(/^[0-9a-f]{64}$/)),
     added: natural,
@@ -143,6 +157,12 @@ export const EnvelopeSchema = v.strictObject({
   mono: finite,
   /** Random word of this start of the program. */
   run: text(16),
+  /**
+   * Orders what a device knew: at least the time in milliseconds, and above the tick of every event the device held when
+   * it recorded this one. Absent in events of other makers: the time stands in.
+   * Source: Lamport (1978), Time, clocks, and the ordering of events in a distributed system, rule IR2.
+   */
+  tick: v.exactOptional(v.pipe(v.number(), v.integer(), v.minValue(0), v.maxValue(lastTick))),
   who: text(120),
   /** Program version. */
   app: text(40),

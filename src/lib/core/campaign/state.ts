@@ -49,7 +49,7 @@ export interface Ruin extends Mark {
 
 /** One specimen in one slot in one session. */
 export interface RunState {
-  /** `session/slot` */
+  /** `session/slot`; an earlier run of the slot adds `/specimen` */
   id: string;
   session: string;
   slot: number;
@@ -58,7 +58,7 @@ export interface RunState {
   /** What really is in the slot; null until loaded. */
   loaded:
     (Mark & { treatment: string; specimen: string; how: 'tap' | 'scan' | 'typed'; because: string | null }) | null;
-  /** Treatment the analysis uses: of the loaded specimen, else of the planned one. */
+  /** Treatment the analysis uses: of the loaded specimen, else of the planned one; '' when nobody knows, or must decide first. */
   treatment: string;
   specimen: string;
   readings: ReadingState[];
@@ -66,6 +66,8 @@ export interface RunState {
   /** Every ruin and reinstatement ever. */
   ruinHistory: (Ruin & { reinstated: (Mark & { reason: string }) | null })[];
   notes: NoteState[];
+  /** Ruined runs of this slot in this session that a spare specimen has followed; oldest first, mostly empty. */
+  earlier: RunState[];
 }
 
 export interface ConditionValue extends Mark {
@@ -109,11 +111,23 @@ export interface Contradiction {
   /** The events that contradict, oldest first. */
   events: CampaignEvent[];
   decided: (Mark & { chosen: string; reason: string }) | null;
+  /** Every decision taken about it, oldest first; a later value opens the question again. */
+  decisions: (Mark & { chosen: string; reason: string })[];
 }
 
 /** Something about the record itself that a person should know. */
 export interface RecordFlag {
-  kind: 'clock-jumped' | 'gap' | 'fork' | 'altered' | 'not-understood' | 'device-fault';
+  kind:
+    | 'clock-jumped'
+    | 'gap'
+    | 'fork'
+    | 'altered'
+    | 'not-understood'
+    | 'device-fault'
+    /** Speaks of a session, slot or event that the record does not hold (yet). */
+    | 'orphan'
+    /** A specimen code that no plan gave. */
+    | 'unknown-specimen';
   device: string;
   event: string | null;
   detail: string;
@@ -144,6 +158,7 @@ export interface CampaignState {
   /** In loading order. */
   sessions: SessionState[];
   shifts: ShiftState[];
+  /** About the campaign or a shift; the others stand with their session or run. */
   notes: NoteState[];
   contradictions: Contradiction[];
   flags: RecordFlag[];

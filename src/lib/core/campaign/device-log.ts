@@ -1,0 +1,96 @@
+import type { CampaignEvent, UnknownEvent } from './event.ts';
+import { markOf } from './marks.ts';
+import { instantOf } from './rfc3339.ts';
+import { noHash, sealOf } from './seal.ts';
+import type { DeviceState, RecordFlag } from './state.ts';
+
+type Any = CampaignEvent | UnknownEvent;
+
+/** A wall clock may drift this far from the forward-only clock between two events before it counts as jumped. */
+const jump = 2_000;
+
+/**
+ * One device's chain in a campaign: its head, what is not exported, and what is wrong with the chain. An event that
+ * continues the chain costs the same however long the chain is; any other is put in its place and the chain read anew.
+ * Checked by: test/core/campaign/device-log.test.ts.
+ */
+export class DeviceLog {
+  readonly device: string;
+  #events: Any[] = [];
+  #flags: RecordFlag[] = [];
+  #state: DeviceState;
+
+  constructor(device: string) {
+    this.device = device;
+    this.#state = { device, seq: 0, head: noHash, sinceExport: 0, lastExport: null };
+  }
+
+  get state(): DeviceState {
+    return this.#state;
+  }
+
+  get flags(): readonly RecordFlag[] {
+    return this.#flags;
+  }
+
+  add(event: Any): void {
+    const last = this.#events.at(-1);
+    const inTurn = last ? event.seq === last.seq + 1 : event.seq === 1;
+    this.#events.push(event);
+    if (inTurn) this.#follow(this.#events.length - 1, event);
+    else {
+      this.#events.sort((a, b) => a.seq - b.seq || (a.id < b.id ? -1 : 1));
+      this.#flags = [];
+      this.#state = { device: this.device, seq: 0, head: noHash, sinceExport: 0, lastExport: null };
+      this.#events.forEach((one, index) => this.#follow(index, one));
+    }
+  }
+
+  #follow(index: number, event: Any): void {
+    const before = this.#events[index - 1];
+    const flag = (kind: RecordFlag['kind'], detail: string): void => {
+      this.#flags = [...this.#flags, { kind, device: this.device, event: event.id, detail }];
+    };
+    const seqBefore = before?.seq ?? 0;
+    if (event.seq === seqBefore) flag('fork', `${event.seq}`);
+    else if (event.seq > seqBefore + 1) flag('gap', `${seqBefore + 1}-${event.seq - 1}`);
+    else if (event.prev !== (before ? sealOf(before) : noHash) && !this.#afterFork(index, event))
+      flag('altered', `${seqBefore}`);
+    if (before && clockJumped(before, event)) flag('clock-jumped', `${before.at} ${event.at}`);
+    if (event.kind === 'device-fault') {
+      const { what, detail } = (event as Extract<CampaignEvent, { kind: 'device-fault' }>).data;
+      flag('device-fault', `${what}: ${detail}`);
+    }
+    const { sinceExport, lastExport } = this.#state;
+    this.#state = {
+      device: this.device,
+      seq: event.seq,
+      head: sealOf(event),
+      ...(event.kind === 'exported'
+        ? exported(event as Extract<CampaignEvent, { kind: 'exported' }>, sinceExport)
+        : { sinceExport: sinceExport + 1, lastExport })
+    };
+  }
+
+  /** After a fork the next event follows one of its ends. */
+  #afterFork(index: number, event: Any): boolean {
+    for (let at = index - 1; this.#events[at]?.seq === event.seq - 1; at--)
+      if (sealOf(this.#events[at] as Any) === event.prev) return true;
+    return false;
+  }
+}
+
+/** Events recorded after the file was written are not in it. */
+function exported(
+  event: Extract<CampaignEvent, { kind: 'exported' }>,
+  since: number
+): Pick<DeviceState, 'sinceExport' | 'lastExport'> {
+  const { upTo, events, sha256, how } = event.data;
+  const left = upTo === undefined ? 0 : Math.max(0, Math.min(since, event.seq - 1 - upTo));
+  return { sinceExport: left, lastExport: { ...markOf(event), events, sha256, how } };
+}
+
+function clockJumped(before: Any, event: Any): boolean {
+  const wall = instantOf(event.at) - instantOf(before.at);
+  return event.run === before.run ? Math.abs(wall - (event.mono - before.mono)) > jump : wall < 0;
+}
