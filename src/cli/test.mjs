@@ -3,7 +3,7 @@ import { spawn } from 'node:child_process';
 import { mkdirSync, readFileSync, rmSync } from 'node:fs';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { provideChromium } from './chromium.mjs';
+import { provideChromium, provideOtherEngines } from './browsers.mjs';
 import { installWhenMissing, requireNode } from './install.mjs';
 
 const root = join(dirname(fileURLToPath(import.meta.url)), '../..');
@@ -101,6 +101,7 @@ if (browser) {
   const chromium = provideChromium();
   if (chromium === null) failed += 1;
   else {
+    provideOtherEngines();
     const ok = await run('browser', ['npx', 'playwright', 'test'], { env: { CHROMIUM_PATH: chromium }, show: true });
     const stats = read('browser.json')?.stats;
     passed += (stats?.expected ?? 0) + (stats?.flaky ?? 0);

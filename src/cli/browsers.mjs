@@ -18,18 +18,35 @@ export function findChromium() {
   return usual.find((path) => existsSync(path)) ?? null;
 }
 
+/**
+ * Installs Debian packages when this may be done; says so.
+ * @param {string[]} packages
+ */
+function installDebian(packages) {
+  if (process.getuid?.() !== 0 || !existsSync('/usr/bin/apt-get')) return;
+  console.log(`Installing for the browser tests: ${packages.join(', ')} …`);
+  const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
+  spawnSync('apt-get', ['update', '-qq'], { stdio: 'ignore', env });
+  spawnSync('apt-get', ['install', '-y', '-qq', ...packages], { stdio: 'ignore', env });
+}
+
+/** The two other engines of the smoke test; where they are missing, their tests say that they were skipped. */
+export function provideOtherEngines() {
+  const missing = [
+    ...(existsSync('/usr/bin/firefox-esr') ? [] : ['firefox-esr']),
+    ...(existsSync('/usr/bin/WebKitWebDriver') ? [] : ['webkit2gtk-driver']),
+    ...(existsSync('/usr/bin/Xvfb') ? [] : ['xvfb'])
+  ];
+  if (missing.length > 0) installDebian(missing);
+}
+
 /** Finds a Chromium, or installs Debian's package when this may be done; else says what to do and returns null. */
 export function provideChromium() {
   const found = findChromium();
   if (found) return found;
-  if (process.getuid?.() === 0 && existsSync('/usr/bin/apt-get')) {
-    console.log('Installing the Debian package chromium for the browser tests …');
-    const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
-    spawnSync('apt-get', ['update', '-qq'], { stdio: 'ignore', env });
-    spawnSync('apt-get', ['install', '-y', '-qq', 'chromium', 'fonts-noto-core'], { stdio: 'ignore', env });
-    const installed = findChromium();
-    if (installed) return installed;
-  }
+  installDebian(['chromium', 'fonts-noto-core']);
+  const installed = findChromium();
+  if (installed) return installed;
   console.error(
     'No Chromium was found for the browser tests. Install one (Debian, Ubuntu: sudo apt-get install chromium) or set CHROMIUM_PATH to its program file.'
   );
