@@ -171,9 +171,11 @@ export function intervalRows(options: IntervalOptions): Scene {
     title: options.title,
     summary: options.summary,
     marks,
-    points: rows.flatMap((row, i) =>
-      row.estimate === null ? [] : [{ x: x(row.estimate), y: yOf(i), label: row.label }]
-    ),
+    points: rows.flatMap((row, i) => {
+      const middle = row.lower !== null && row.upper !== null ? (row.lower + row.upper) / 2 : row.plain;
+      const place = row.estimate ?? middle;
+      return place === null ? [] : [{ x: x(place), y: yOf(i), label: row.label }];
+    }),
     walk: 'rows',
     table: options.table
   };
