@@ -5,6 +5,7 @@ import {
   chiSquaredUpper,
   chiSquaredUpperQuantile
 } from '#lib/core/numerics/distributions/chi-squared.ts';
+import { dunnettUpperQuantile } from '#lib/core/numerics/distributions/dunnett.ts';
 import { fCdf, fUpper, fUpperQuantile } from '#lib/core/numerics/distributions/f.ts';
 import { noncentralFCdf, noncentralFUpper } from '#lib/core/numerics/distributions/noncentral-f.ts';
 import { noncentralTCdf, noncentralTUpper } from '#lib/core/numerics/distributions/noncentral-t.ts';
@@ -194,6 +195,13 @@ const CHECKS: readonly Check[] = [
     {
       tolerance: 1e-10
     }
+  ),
+  check(
+    'dunnett',
+    'dunnettUpperQuantile',
+    (r) => dunnettUpperQuantile(r.alpha!, r.m!, r.df!, r.sides === 2 ? 'two' : 'one'),
+    (r) => r.crit!,
+    { tolerance: 1e-9 }
   )
 ];
 
