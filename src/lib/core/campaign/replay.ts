@@ -45,6 +45,7 @@ export class Replay {
   #dirty = new Set<string>();
   #replan = true;
   #state: CampaignState | null = null;
+  #tick = 0;
 
   constructor(campaign: string) {
     this.#campaign = campaign;
@@ -55,6 +56,7 @@ export class Replay {
     if (this.#ids.has(event.id)) return;
     this.#ids.set(event.id, event);
     this.#state = null;
+    this.#tick = Math.max(this.#tick, event.tick ?? 0);
     let log = this.#devices.get(event.device);
     if (!log) this.#devices.set(event.device, (log = new DeviceLog(event.device)));
     log.add(event);
@@ -126,6 +128,11 @@ export class Replay {
 
   #reinstatement = (ruin: string): Of<'reinstated'> | undefined =>
     inOrder((this.#reinstating.get(ruin) ?? []).filter((event) => !this.#undone(event.id)))[0];
+
+  /** Highest tick of any event taken in. */
+  get tick(): number {
+    return this.#tick;
+  }
 
   /** The state of everything taken in so far; parts that did not change are the same objects as before. */
   get state(): CampaignState {

@@ -1,0 +1,128 @@
+import { checkEvent } from '#lib/core/campaign/check-event.ts';
+import type { CampaignEvent, UnknownEvent } from '#lib/core/campaign/event.ts';
+import type { Sealed } from '#lib/core/campaign/make-event.ts';
+import { rememberSeal, sha256OfText } from '#lib/core/campaign/seal.ts';
+import type { CampaignSummary } from '#lib/core/campaign/summary.ts';
+import type { Result } from '#lib/core/result.ts';
+import type { Connection } from './connection.ts';
+import type { StorageFault } from './fault.ts';
+import type { StoredEvent } from './schema.ts';
+
+type Any = CampaignEvent | UnknownEvent;
+
+export const placeOf = (event: Any): string => `${event.campaign}/${event.device}/${event.seq}`;
+
+const storedOf = ({ event, text, seal }: Pick<Sealed, 'text' | 'seal'> & { event: Any }): StoredEvent => ({
+  id: event.id,
+  campaign: event.campaign,
+  place: placeOf(event),
+  text,
+  seal
+});
+
+const strict = { durability: 'strict' } as const;
+
+/**
+ * Writes one event for good. It returns after the transaction has completed with strict durability, and only then may
+ * anybody say *saved*. The draft it came from goes in the same transaction. Safe to run again: after a lost connection
+ * the event is looked for first, and a number another tab has taken meanwhile is refused (`stale`).
+ */
+export function append(
+  connection: Connection,
+  sealed: Sealed,
+  summary: CampaignSummary,
+  draft: string | null = null
+): Promise<Result<void, StorageFault>> {
+  const { campaign } = sealed.event;
+  return connection.write(async (db, attempt) => {
+    const tx = db.transaction(['events', 'campaigns', 'drafts'], 'readwrite', strict);
+    // A transaction that aborts rejects `done` and the request; the request's error is the one that is told.
+    tx.done.catch(() => undefined);
+    const events = tx.objectStore('events');
+    if (attempt > 1 && (await events.get(sealed.event.id))?.text === sealed.text) return await tx.done;
+    const writes: Promise<unknown>[] = [events.add(storedOf(sealed)), tx.objectStore('campaigns').put(summary)];
+    if (draft !== null) writes.push(tx.objectStore('drafts').delete([campaign, draft]));
+    await Promise.all([...writes, tx.done]);
+  });
+}
+
+/** What a campaign's log holds, read back and checked. */
+export interface LoadedLog {
+  events: Any[];
+  /** Records that could not be read as events: kept in the database, not replayed. */
+  unreadable: { id: string; path: string; cause: string }[];
+}
+
+/** Every event of a campaign. `verify` hashes each text anew and reports the ones whose seal does not fit. */
+export function load(
+  connection: Connection,
+  campaign: string,
+  verify = false
+): Promise<Result<LoadedLog, StorageFault>> {
+  return connection.use(async (db) => {
+    const stored = await db.getAllFromIndex('events', 'campaign', campaign);
+    const loaded: LoadedLog = { events: [], unreadable: [] };
+    for (const one of stored) readOne(one, loaded, verify);
+    return loaded;
+  });
+}
+
+function readOne(stored: StoredEvent, loaded: LoadedLog, verify: boolean): void {
+  const refuse = (path: string, cause: string): void => void loaded.unreadable.push({ id: stored.id, path, cause });
+  let value: unknown;
+  try {
+    value = JSON.parse(stored.text);
+  } catch {
+    refuse('', 'not JSON');
+    return;
+  }
+  const checked = checkEvent(value);
+  if (!checked.ok) refuse(checked.error.path, checked.error.cause);
+  else if (verify && sha256OfText(stored.text) !== stored.seal) refuse('', 'seal does not fit');
+  else {
+    rememberSeal(checked.value, stored.seal);
+    loaded.events.push(checked.value);
+  }
+}
+
+export interface Incoming {
+  event: Any;
+  text: string;
+  seal: string;
+}
+
+/**
+ * Takes accepted events of other devices in, all or none, in one transaction with the event that says so. Events held
+ * already are left alone; the same id with other bytes goes to quarantine; a number taken twice (a fork) is kept beside
+ * the first.
+ */
+export function takeIn(
+  connection: Connection,
+  incoming: readonly Incoming[],
+  note: Sealed,
+  from: string,
+  summary: CampaignSummary
+): Promise<Result<{ quarantined: number }, StorageFault>> {
+  return connection.write(async (db) => {
+    const tx = db.transaction(['events', 'campaigns', 'quarantine'], 'readwrite', strict);
+    tx.done.catch(() => undefined);
+    const events = tx.objectStore('events');
+    let quarantined = 0;
+    for (const one of incoming) {
+      const stored = storedOf(one);
+      const held = await events.get(stored.id);
+      if (held && held.text !== stored.text) {
+        quarantined++;
+        const { campaign, id, text, seal } = stored;
+        await tx.objectStore('quarantine').put({ campaign, id, text, seal, from, at: note.event.at });
+      } else if (!held) {
+        const taken = await events.index('place').getKey(stored.place);
+        await events.add(taken === undefined ? stored : { ...stored, place: `${stored.place}/${stored.id}` });
+      }
+    }
+    if (!(await events.get(note.event.id))) await events.add(storedOf(note));
+    await tx.objectStore('campaigns').put(summary);
+    await tx.done;
+    return { quarantined };
+  });
+}
