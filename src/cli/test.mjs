@@ -67,6 +67,13 @@ function read(file) {
   }
 }
 
+const manifest = JSON.parse(readFileSync(join(root, 'package.json'), 'utf8'));
+console.log(
+  `Runtime dependencies: ${Object.entries(manifest.dependencies)
+    .map((pair) => pair.join(' '))
+    .join(', ')}`
+);
+
 await check('sync', ['npx', 'svelte-kit', 'sync']);
 await Promise.all([
   (async () => {
