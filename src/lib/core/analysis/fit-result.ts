@@ -51,8 +51,10 @@ export interface PairLine {
   /** Unadjusted. */
   p: number | null;
   pHolm: number | null;
-  /** Tukey–Kramer over all treatments with readings (of the pair's own part where the design is in parts). */
+  /** Tukey–Kramer over all treatments with readings, also where the design is in parts. */
   pTukey: number | null;
+  /** Tukey–Kramer over the treatments of the pair's own part; equals pTukey where the design is connected. */
+  pTukeyPart: number | null;
   /** Unadjusted interval of level 1 − alpha. */
   lower: number | null;
   upper: number | null;
@@ -73,8 +75,8 @@ export interface WorkingsLine {
   /** Balanced case only: sum B of the totals of the sessions that hold the treatment, and k·Q. */
   B: number | null;
   kQ: number | null;
-  /** Effect, adding to zero in each connected part. */
-  effect: number;
+  /** Effect, adding to zero in each connected part; null without kept readings. */
+  effect: number | null;
 }
 
 export interface Workings {
@@ -102,7 +104,7 @@ export interface FixedFit {
   workings: Workings;
   /** Session offsets from the average session (inside each part), adjusted for the treatments. */
   sessionEffects: { session: number; effect: number | null }[];
-  /** Half-width multipliers of the standard error: t and q/√2. */
+  /** Half-width multipliers of the standard error of a difference: t and q/√2. */
   critical: { t: number | null; tukey: number | null };
   /** Coefficient of the specimen covariate, if it is in the model. */
   covariate: { slope: number; se: number | null; t: number | null; df: number; p: number | null } | null;

@@ -20,6 +20,7 @@ export type Reason =
   | { tag: 'one-level'; factor: string }
   | { tag: 'confounded'; factor: string; with: string }
   | { tag: 'covariate-missing'; rows: readonly number[] }
+  | { tag: 'level-missing'; factor: string; rows: readonly number[] }
   | { tag: 'not-balanced' }
   | { tag: 'not-complete' }
   | { tag: 'repeated-in-session' }
