@@ -51,6 +51,8 @@ export const reasons: typeof en = {
         return `${capital(named(reason.factor))} lässt sich nicht trennen von: ${named(reason.with)}. Beide wechselten immer zusammen.`;
       case 'covariate-missing':
         return `Die gemessene Probeneigenschaft fehlt in Zeile ${list(reason.rows)}. Eintragen oder die Eigenschaft weglassen.`;
+      case 'level-missing':
+        return `Für Zeile ${list(reason.rows)} fehlt die Angabe: ${reason.factor}. Eintragen oder aus dem Modell nehmen.`;
       case 'not-balanced':
         return 'Die zählenden Läufe sind nicht ausgewogen; dieses Verfahren verlangt das. Das Verfahren für unausgewogene Läufe steht daneben.';
       case 'not-complete':

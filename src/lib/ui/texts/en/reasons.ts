@@ -42,6 +42,8 @@ export const reasons = {
         return `The ${reason.factor} cannot be told from the ${reason.with}: they always changed together.`;
       case 'covariate-missing':
         return `The measured property of the specimen is missing for rows ${list(reason.rows)}. Enter it, or leave the property out.`;
+      case 'level-missing':
+        return `The ${reason.factor} is missing for rows ${list(reason.rows)}. Enter it, or leave the ${reason.factor} out of the model.`;
       case 'not-balanced':
         return 'The kept runs are not balanced; this method needs balance. The method for unbalanced runs stands beside it.';
       case 'not-complete':
