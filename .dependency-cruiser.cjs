@@ -50,10 +50,23 @@ module.exports = {
     ),
     only(
       'exchange-on-campaign',
-      'core/exchange/',
+      'core/exchange/(?!package/)',
       'core/(exchange/|campaign/|result)',
       'Files carry the record and nothing else.'
     ),
+    only(
+      'package-on-campaign-and-results',
+      'core/exchange/package/',
+      'core/(exchange/|campaign/|analysis/|result)',
+      'A data package carries the record and the results, and computes neither.'
+    ),
+    {
+      name: 'package-names-results-only',
+      severity: 'error',
+      comment: 'A data package may name the types of an analysis; it runs none.',
+      from: { path: '^src/lib/core/exchange/package/' },
+      to: { path: '^src/lib/core/analysis/', dependencyTypesNot: ['type-only'] }
+    },
     only('formula-on-core', 'formula/', 'formula/|core/', 'formula is an adapter around core.'),
     only('storage-on-core', 'storage/', 'storage/|core/', 'storage is an adapter around core.'),
     only(
