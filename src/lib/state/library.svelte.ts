@@ -12,6 +12,7 @@ import type { StorageFault } from '#lib/storage/fault.ts';
 import { append, load, takeIn } from '#lib/storage/journal.ts';
 import { tellOthers, whenOthersWrite } from './channel.ts';
 import { connection } from './database.svelte.ts';
+import type { Act } from './demo/demo-acts.ts';
 import { device } from './device.svelte.ts';
 import { newId, stampNow } from './surroundings.ts';
 
@@ -23,9 +24,6 @@ export interface ProposedImport {
   /** The campaign is new on this device. */
   isNew: boolean;
 }
-
-/** An event to be recorded in a campaign made at once (a demo). */
-export type Act = { [K in Kind]: { kind: K; data: DataOf<K>; who: string; at: number } }[Kind];
 
 /** The campaigns on this device. */
 class Library {

@@ -1,15 +1,13 @@
-import type { CampaignEvent, DataOf, Kind } from '#lib/core/campaign/event.ts';
-import { makeEvent, type Head } from '#lib/core/campaign/make-event.ts';
+import type { DataOf, Kind } from '#lib/core/campaign/event.ts';
 import type { IssuedPlan, PlannedSession } from '#lib/core/campaign/plan.ts';
-import { noHash } from '#lib/core/campaign/seal.ts';
 import { balancedDesign } from '#lib/core/design/catalogue/balanced-design.ts';
 import { layOutPlan } from '#lib/core/design/lay-out-plan.ts';
 import { seededRandom, type SeededRandom } from '#lib/core/numerics/random/seeded-random.ts';
 import { demoPlan, demoTruth } from './demo-plan.ts';
 
-/** The demo is one campaign for ever, recorded by a tablet that never was. */
-export const demoCampaign = '019aa000-0000-7000-8000-00000000de30';
-const tablet = '019aa000-0000-7000-8000-00000000ab1e';
+/** Something done at a time by somebody: an event before it is sealed. */
+export type Act = { [K in Kind]: { kind: K; data: DataOf<K>; who: string; at: number } }[Kind];
+
 const technician = 'A. Demo (invented)';
 const start = Date.UTC(2026, 9, 5, 6, 0);
 const minute = 60_000;
@@ -17,21 +15,15 @@ const done = 8;
 
 type Write = <K extends Kind>(kind: K, data: DataOf<K>, minutes: number) => void;
 
-/** The invented campaign as events: two thirds of its readings in, one ruined run, one odd reading, one missing. */
-export function demoEvents(app: string): CampaignEvent[] {
+/** The invented campaign act by act: two thirds of its readings in, one ruined run, one odd reading, one missing. */
+export function demoActs(): Act[] {
   const random = seededRandom('wall paints, invented');
   const issued = issueDemo();
-  const events: CampaignEvent[] = [];
-  let head: Head = { campaign: demoCampaign, device: tablet, seq: 0, hash: noHash, tick: 0 };
+  const acts: Act[] = [];
   let now = start;
   const write: Write = (kind, data, minutes) => {
     now += Math.round(minutes * minute);
-    const bytes = Uint8Array.from({ length: 10 }, () => random.below(256));
-    const stamp = { now, offset: 120, mono: now - start, run: 'demo', app, random: bytes };
-    const made = makeEvent({ kind, data, who: technician }, head, stamp);
-    if (!made.ok) throw new Error(`demo: ${kind} ${made.error.path} ${made.error.cause}`);
-    head = made.value.head;
-    events.push(made.value.event);
+    acts.push({ kind, data, who: technician, at: now } as Act);
   };
 
   write('campaign-created', { title: issued.plan.title, demo: true }, 0);
@@ -46,7 +38,7 @@ export function demoEvents(app: string): CampaignEvent[] {
     if (issued.sessions[i + 1]?.shift !== session.shift)
       write('shift-closed', { shift: session.shift, operator: technician, handOver: handOver(session.shift) }, 10);
   });
-  return events;
+  return acts;
 }
 
 const handOver = (shift: number): string =>
