@@ -21,7 +21,7 @@ export interface ControlComparison {
   control: number;
   lines: ControlLine[];
   critical: number;
-  method: 'quadrature' | 'quasi-monte-carlo';
+  method: 'quadrature' | 'quasi-monte-carlo' | 'expansion';
   /** Treatments without an estimable difference to the control. */
   lost: number[];
 }

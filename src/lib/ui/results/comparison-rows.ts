@@ -108,7 +108,7 @@ export function comparisonRows(
     }));
     const error = Math.max(0, ...lines.map((line) => line.pError));
     return table([...rows, ...gone], {
-      note: way === 'quasi-monte-carlo' ? t.accuracy(write.significant(error, 1)) : null
+      note: way === 'quadrature' ? null : t.accuracy(write.significant(error, 1))
     });
   }
 
