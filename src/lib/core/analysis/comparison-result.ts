@@ -26,7 +26,7 @@ export interface ControlComparison {
   lost: number[];
 }
 
-/** Hsu: treatment − best of the others, with the constrained interval; `mayBeBest` when it reaches beyond zero. */
+/** Hsu: treatment − best of the others, with the constrained interval; `isBest` when it alone may be the best. */
 export interface BestLine {
   treatment: number;
   lower: number;
