@@ -17,7 +17,7 @@ export function runName(view: ResultView, row: number, words: Pick<WarningWords,
   if (found === undefined) return String(row + 1);
   return words.results.runName(
     treatmentName(view, found.treatment),
-    sessionName(view, found.session),
+    words.results.session(sessionName(view, found.session)),
     found.slot === null ? null : String(found.slot + 1)
   );
 }

@@ -297,6 +297,14 @@ export const layers: typeof en = {
     seed: 'Startwert der Simulationen',
     runs: 'Läufe: geplant, zählend, verworfen, ohne Messwert',
     flags: 'Bemerkungen zur Aufzeichnung',
+    flag: {
+      'clock-jumped': 'Die Uhr eines Geräts sprang zurück; die Reihenfolge seiner Ereignisse sichern ihre Nummern.',
+      gap: 'Dazwischen fehlen Ereignisse eines Geräts: seine vollständige Kampagnendatei anfordern.',
+      fork: 'Ein Gerät hat zwei Verläufe: es wurde aus einer Kopie wiederhergestellt, oder seine Datei wurde verändert.',
+      altered: 'Ein Ereignis passt nicht zu seinem Siegel: es wurde nach der Aufzeichnung verändert.',
+      'not-understood': 'Ereignisse einer späteren Programmfassung sind aufbewahrt, werden hier aber nicht verstanden.',
+      'device-fault': 'Ein Gerät meldete einen eigenen Fehler.'
+    },
     noFlags: 'Nichts zu bemerken: keine Lücke, keine Gabelung, kein verändertes Ereignis, keine springende Uhr.',
     contradictions: (n) =>
       `${n} Widersprüche warten auf eine Entscheidung; die betroffenen Messwerte zählen noch nicht.`,

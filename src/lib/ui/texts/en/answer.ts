@@ -1,3 +1,5 @@
+import { inSentence } from '../../format/unit-text.ts';
+
 /** The finding as one sentence a person would say aloud. Values arrive written, with unit. */
 export const answer = {
   and: (names: readonly string[]): string =>
@@ -8,21 +10,21 @@ export const answer = {
     higher: { best: 'highest', better: 'higher', worse: 'lower', less: 'more' }
   },
   oneBest: (way: 'lower' | 'higher', name: string, what: string, mean: string) =>
-    `${name} has the ${way === 'lower' ? 'lowest' : 'highest'} ${what}: ${mean}.`,
+    `${name} has the ${way === 'lower' ? 'lowest' : 'highest'} ${inSentence(what)}: ${mean}.`,
   oneBestGap: (way: 'lower' | 'higher', gap: string, level: string, lower: string, upper: string, next: string) =>
     `That is ${gap} (${level} interval ${lower} to ${upper}) ${way === 'lower' ? 'less' : 'more'} than the next, ${next}.`,
   nearest: (name: string, what: string, target: string, mean: string) =>
-    `${name} comes nearest to the target of ${target} in ${what}: ${mean}.`,
+    `${name} comes nearest to the target of ${target} in ${inSentence(what)}: ${mean}.`,
   nearestGap: (gap: string, level: string, lower: string, upper: string, next: string) =>
     `It misses by ${gap} (${level} interval ${lower} to ${upper}) less than the next, ${next}.`,
   severalBest: (way: 'lower' | 'higher', leader: string, what: string, mean: string, others: string) =>
-    `${leader} has the ${way === 'lower' ? 'lowest' : 'highest'} ${what}, ${mean}, but ${others} cannot be told from it.`,
+    `${leader} has the ${way === 'lower' ? 'lowest' : 'highest'} ${inSentence(what)}, ${mean}, but ${others} cannot be told from it.`,
   severalNearest: (leader: string, what: string, mean: string, others: string) =>
-    `${leader} comes nearest to the target in ${what} with ${mean}, but ${others} cannot be told from it.`,
+    `${leader} comes nearest to the target in ${inSentence(what)} with ${mean}, but ${others} cannot be told from it.`,
   worse: (way: 'lower' | 'higher', names: string) => `Clearly ${way === 'lower' ? 'higher' : 'lower'}: ${names}.`,
   further: (names: string) => `Clearly further off: ${names}.`,
   noneDiffer: (what: string, p: string | null) =>
-    `No difference in ${what} between the treatments is shown${p === null ? '' : ` (p = ${p})`}.`,
+    `No difference in ${inSentence(what)} between the treatments is shown${p === null ? '' : ` (p = ${p})`}.`,
   noneDifferMore: (leader: string, mean: string) =>
     `${leader} came first with ${mean}. This is no proof that all are equal: see how small a difference these runs could have found.`,
   parts: (parts: number) =>

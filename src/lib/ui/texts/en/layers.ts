@@ -291,6 +291,14 @@ export const layers = {
     seed: 'Seed of simulations',
     runs: 'Runs: planned, counting, ruined, without reading',
     flags: 'Remarks on the record',
+    flag: {
+      'clock-jumped': 'A device clock jumped backwards; the order of its events is kept by their numbers.',
+      gap: 'Events of a device are missing in between: ask for its full campaign file.',
+      fork: 'A device has two histories: it was restored from a copy, or its file was changed.',
+      altered: 'An event does not fit its seal: it was changed after it was recorded.',
+      'not-understood': 'Events of a later program version are kept, but not understood here.',
+      'device-fault': 'A device reported a fault of its own.'
+    } as Record<string, string>,
     noFlags: 'Nothing to remark: no gap, no fork, no altered event, no jumping clock.',
     contradictions: (n: string) => `${n} contradictions wait for a decision; the readings concerned do not count yet.`,
     decide: 'Decide them'

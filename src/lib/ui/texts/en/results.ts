@@ -1,3 +1,5 @@
+import { inSentence } from '../../format/unit-text.ts';
+
 export const results = {
   title: 'Results',
   heading: (campaign: string) => `Results: ${campaign}`,
@@ -21,6 +23,7 @@ export const results = {
   toBench: 'To the bench',
   toDesk: 'Bring in a file',
   question: 'Question',
+  demo: 'invented demo data',
   measurand: 'Measurand',
   primary: 'primary',
   primaryLong: 'primary analysis, fixed in the plan',
@@ -31,9 +34,9 @@ export const results = {
   looks: 'Look at this first',
   nothingToLook: 'No warning: the checks found nothing to look at.',
   todo: 'To do',
-  picture: (what: string) => `Adjusted means of ${what}`,
+  picture: (what: string) => `Adjusted means: ${inSentence(what)}`,
   pictureSummary: (level: string, what: string, first: string, last: string) =>
-    `Adjusted means of ${what} with ${level} intervals, best first: from ${first} to ${last}. Plain averages beside, letters at the right.`,
+    `Adjusted means of ${inSentence(what)} with ${level} intervals, best first: from ${first} to ${last}. Plain averages beside, letters at the right.`,
   legend: {
     estimate: 'adjusted mean',
     interval: (level: string) => `${level} interval`,
@@ -82,7 +85,15 @@ export const results = {
   runName: (treatment: string, session: string, slot: string | null) =>
     `${treatment}, ${session}${slot === null ? '' : `, slot ${slot}`}`,
   session: (number: string) => `session ${number}`,
-  deviation: (text: string) => `${text}`,
+  cannotOpen: 'The campaign could not be opened. What was recorded is not affected.',
+  unknown: 'There is no such campaign on this device.',
+  noneOpen: 'No campaign is open.',
+  home: 'To all campaigns',
+  loading: 'Opening the campaign …',
+  formulaFault: 'The formula of this measurand cannot be used. See the plan; the readings are not affected.',
+  newRecord: 'New readings have come in since this was computed.',
+  stale: 'Compute with them',
+  took: (seconds: string) => `Computed in ${seconds} s on this device.`,
   save: 'Take it with you',
   report: 'Report',
   package: 'Data package',
