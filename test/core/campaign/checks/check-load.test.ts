@@ -27,6 +27,12 @@ it('checkLoad(code used before) refuses and says where it was', () => {
   expect(verdict('B-1')).toMatchObject({ kind: 'used', place: { number: 1, slot: 1 } });
 });
 
+it('checkLoad(code of a run that a spare has followed) is used as well', () => {
+  const followed = loadedRun('s1', 0, 'A-3', { earlier: [loadedRun('s1', 0, 'A-1')] });
+  const later = campaign([session(1, [followed]), session(2, [run('s2', 0, 'C-1')])]);
+  expect(checkLoad(later, 's2', 0, 'A-1', wellFormed)).toMatchObject({ kind: 'used' });
+});
+
 it('checkLoad(code already in this slot) says so', () => {
   expect(checkLoad(state, 's1', 1, 'B-1', wellFormed)).toEqual({ kind: 'already-here', code: 'B-1' });
 });

@@ -35,10 +35,11 @@ describe('nextStep(plan, session)', () => {
     expect(step({})).toEqual({ kind: 'prepare' });
   });
   it('loads slot by slot', () => {
-    expect(step({ precautions: mark })).toEqual({ kind: 'load', slot: 0 });
+    expect(step({ precautions: mark })).toEqual({ kind: 'load', slot: 0, spare: false });
     expect(step({ precautions: mark }, [loadedRun('s1', 0, 'A-1'), run('s1', 1, 'B-1')])).toEqual({
       kind: 'load',
-      slot: 1
+      slot: 1,
+      spare: false
     });
   });
   it('reads before the start what is read before', () => {
@@ -63,6 +64,21 @@ describe('nextStep(plan, session)', () => {
     expect(step({ precautions: mark, started, stopped }, both('before', 'after'))).toEqual({ kind: 'close' });
     expect(step({ ruined: { ...ruined, whole: true } })).toEqual({ kind: 'close' });
     expect(step({ precautions: mark }, [run('s1', 0, 'A-1', { ruined })])).toEqual({ kind: 'close' });
+  });
+  it('loads a spare into the slot of a ruined run when that was chosen', () => {
+    const runs = [loadedRun('s1', 0, 'A-1', { ruined: { ...ruined, next: 'spare-now' } }), ...both('before').slice(1)];
+    expect(step({ precautions: mark }, runs)).toEqual({ kind: 'load', slot: 0, spare: true });
+    expect(step({ precautions: mark, started }, runs)).toEqual({ kind: 'running', place: null });
+  });
+  it('starts again for a spare that came after the stop', () => {
+    const later = { ...mark, at: '2026-01-01T09:00:00.000+01:00' };
+    const earlier = [loadedRun('s1', 0, 'A-1', { ruined: { ...ruined, next: 'spare-now' } })];
+    const planned = loadedRun('s1', 0, 'A-9', { earlier, readings: [read('before')] });
+    const loaded = planned.loaded && { ...planned.loaded, ...later };
+    const runs = [{ ...planned, loaded }, ...both('before', 'after').slice(1)];
+    expect(step({ precautions: mark, started, stopped }, runs)).toEqual({ kind: 'start' });
+    const again = { ...started, at: '2026-01-01T09:05:00.000+01:00' };
+    expect(step({ precautions: mark, started: again, stopped: null }, runs)).toEqual({ kind: 'running', place: null });
   });
   it('has nothing left in a closed session', () => {
     expect(step({ status: 'closed', closed: mark })).toEqual({ kind: 'closed' });

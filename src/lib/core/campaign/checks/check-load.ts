@@ -48,7 +48,9 @@ export function checkLoad(
 ): LoadVerdict {
   const wanted = plainCode(typed);
   const same = (code: string | undefined) => code !== undefined && plainCode(code) === wanted;
-  const runs = state.sessions.flatMap((s) => s.runs.map((run) => ({ s, run })));
+  const runs = state.sessions.flatMap((s) =>
+    s.runs.flatMap((run) => [run, ...run.earlier].map((one) => ({ s, run: one })))
+  );
 
   const loaded = runs.find(({ run }) => same(run.loaded?.specimen));
   if (loaded) {

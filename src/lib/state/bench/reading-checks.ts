@@ -1,0 +1,36 @@
+import { checkRange } from '#lib/core/campaign/checks/check-range.ts';
+import { checkSlip } from '#lib/core/campaign/checks/check-slip.ts';
+import { checkStuck } from '#lib/core/campaign/checks/check-stuck.ts';
+import type { Finding } from '#lib/core/campaign/checks/finding.ts';
+import type { UnderstoodReading } from '#lib/core/campaign/parse-reading.ts';
+import type { CampaignState } from '#lib/core/campaign/state.ts';
+import type { EntryPlace } from './reading-entry.svelte.ts';
+
+/** What the checks that need no model say about a value, the most telling first. */
+export function checksFor(state: CampaignState, place: EntryPlace, understood: UnderstoodReading): Finding[] {
+  const { definition } = place;
+  const { value, plain, limit } = understood;
+  const findings: Finding[] = [];
+  const range = checkRange(value, definition.possible, definition.expected);
+  if (range) {
+    const candidates = checkSlip(value, plain, definition.expected);
+    if (candidates.length > 0) findings.push({ check: 'slip', value, candidates });
+    findings.push(range);
+  }
+  if (limit === 'none') {
+    const stuck = checkStuck(value, readingsBefore(state, definition.id), definition.resolution, null);
+    if (stuck) findings.push(stuck);
+  }
+  return findings;
+}
+
+/** Kept readings of one kind over the campaign, in the order they were recorded. */
+function readingsBefore(state: CampaignState, reading: string): number[] {
+  return state.sessions
+    .flatMap(({ runs }) => runs.flatMap((run) => [...run.earlier, run]))
+    .flatMap(({ readings }) => readings.filter((one) => one.reading === reading))
+    .flatMap(({ current }) => (current && current.limit === 'none' ? [current] : []))
+    .map(({ at, value }) => ({ at: Date.parse(at), value }))
+    .sort((a, b) => a.at - b.at)
+    .map(({ value }) => value);
+}

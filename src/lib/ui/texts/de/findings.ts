@@ -1,0 +1,30 @@
+import type { findings as en } from '../en/findings.ts';
+
+const seite = { below: 'unter', above: 'über' };
+
+export const findings: typeof en = {
+  range: (min, max) =>
+    min !== null && max !== null
+      ? `${min} bis ${max}`
+      : min !== null
+        ? `mindestens ${min}`
+        : max !== null
+          ? `höchstens ${max}`
+          : '',
+  impossible: (value, side, range) => `${value} kann nicht sein: ${seite[side]} dem Möglichen (${range}).`,
+  unexpected: (value, side, range) => `${value} liegt ${seite[side]} dem Erwarteten (${range}).`,
+  slip: (value, meant, how) =>
+    ({
+      decimal: `${value} kann ein verrutschtes Komma sein: ${meant} wäre zu erwarten.`,
+      inch: `${value} kann in der falschen Einheit stehen (Zoll und Millimeter): ${meant} wäre zu erwarten.`,
+      'swapped-digits': `In ${value} können zwei Ziffern vertauscht sein: ${meant} wäre zu erwarten.`
+    })[how],
+  slipTaken: (typed, taken) => `${typed} wurde getippt; ${taken} wurde angeboten und übernommen.`,
+  stuck: (value, times) =>
+    `${value} kam ${times}-mal hintereinander. Bei diesem Messgerät ist das unwahrscheinlich: hängt es?`,
+  surprise: (measurand, value, low, high) =>
+    `${measurand} wird ${value}. Nach den bisherigen Messungen wären hier ${low} bis ${high} zu erwarten.`,
+  condition: (label, value, side, window) => `${label} ${value} liegt ${seite[side]} dem Fenster (${window}).`,
+  missing: (what, where) => `${what} von ${where} fehlt.`,
+  clock: 'Die Uhr dieses Geräts ist gesprungen. Die Reihenfolge der Aufzeichnung ist sicher; sehen Sie nach der Uhr.'
+};
