@@ -1,12 +1,20 @@
 import type { Blocks } from '../blocks.ts';
 import type { Candidate, Construction } from './candidate.ts';
-import { differenceSearch } from './difference-search.ts';
-import { affineGeometry, projectiveGeometry } from './finite-geometry.ts';
+import { listedBaseBlocks } from './constructions/base-blocks.ts';
+import { hadamardHalves, hadamardSymmetric } from './constructions/hadamard.ts';
+import { hyperovalBiplane } from './constructions/hyperoval-biplane.ts';
+import { inversivePlane } from './constructions/inversive-plane.ts';
+import { kirkmanTriples } from './constructions/kirkman.ts';
+import { mcFarland } from './constructions/mcfarland.ts';
+import { roundRobin } from './constructions/round-robin.ts';
+import { steinerTriples } from './constructions/triple-systems.ts';
+import { differenceSearch } from './orbits/difference-search.ts';
+import { affineGeometry, projectiveGeometry } from './constructions/finite-geometry.ts';
 import { isOpen, nonExistence, type NonExistenceTheorem } from './non-existence.ts';
 import { parametersOf, smallerOf, type Parameters } from './parameters.ts';
-import { powerResidues } from './power-residues.ts';
-import { complement, derived, residual } from './residual-derived.ts';
-import { completeBlocks, everyCombination } from './small-constructions.ts';
+import { powerResidues } from './constructions/power-residues.ts';
+import { complement, derived, residual } from './constructions/residual-derived.ts';
+import { completeBlocks, everyCombination } from './constructions/small-constructions.ts';
 import { verifyBalanced } from './verify-balanced.ts';
 
 /** A balanced design that has been counted, and where it comes from. */
@@ -23,9 +31,6 @@ export type BalancedAnswer =
   | { status: 'impossible'; theorem: NonExistenceTheorem; why: string }
   | { status: 'open'; why: string }
   | { status: 'not-found'; why: string };
-
-const QUICK = 20_000;
-const PATIENT = 400_000;
 
 /**
  * A balanced design for t treatments, k to a session, each r times, or why there is none.
@@ -54,14 +59,17 @@ export function balancedDesign(t: number, k: number, r: number): BalancedAnswer 
   const small = smallerOf(p);
   const none = k === t ? null : nonExistence(small);
   if (none) return { status: 'impossible', ...none };
+  if (isOpen(small)) {
+    const why =
+      'Whether such a design exists is undecided (Handbook of Combinatorial Designs, 2nd ed. 2007, table II.1.1).';
+    return { status: 'open', why };
+  }
   const found = construct(small);
   if (found) return { status: 'exists', design: counted(p, small === p ? found : complementOf(found, t)) };
-  return isOpen(small)
-    ? {
-        status: 'open',
-        why: 'Whether such a design exists is undecided (Handbook of Combinatorial Designs, 2nd ed. 2007, table II.1.1).'
-      }
-    : { status: 'not-found', why: 'No theorem forbids such a design, but none of the constructions here gives it.' };
+  return {
+    status: 'not-found',
+    why: 'No theorem forbids such a design, but none of the constructions here gives it.'
+  };
 }
 
 /** The design with its parameters, after counting; a construction that miscounts is a bug. */
@@ -84,20 +92,36 @@ function complementOf({ blocks, construction, constructionId, source }: Candidat
   };
 }
 
-const CONSTRUCTIONS: readonly Construction[] = [
+/** Constructions that give a design at once. */
+const DIRECT: readonly Construction[] = [
   completeBlocks,
+  roundRobin,
   everyCombination,
   affineGeometry,
+  kirkmanTriples,
+  hadamardHalves,
   projectiveGeometry,
   powerResidues,
-  (p) => fromSymmetric(p),
-  differenceSearch(QUICK),
-  (p) => multiple(p),
-  differenceSearch(PATIENT)
+  hadamardSymmetric,
+  mcFarland,
+  inversivePlane,
+  steinerTriples,
+  hyperovalBiplane,
+  listedBaseBlocks
 ];
 
-function construct(p: Parameters): Candidate | null {
-  for (const construction of CONSTRUCTIONS) {
+const ALL: readonly Construction[] = [
+  ...DIRECT,
+  (p) => differenceSearch(p, 'plain', [1000]),
+  (p) => fromSymmetric(p),
+  (p) => differenceSearch(p, 'plain', [10_000]),
+  (p) => multiple(p),
+  (p) => differenceSearch(p, 'further', [1000, 10_000]),
+  (p) => differenceSearch(p, 'plain', [200_000])
+];
+
+function construct(p: Parameters, constructions = ALL): Candidate | null {
+  for (const construction of constructions) {
     const candidate = construction(p);
     if (candidate) return candidate;
   }

@@ -1,4 +1,4 @@
-import type { Blocks } from '../blocks.ts';
+import type { Blocks } from '../../blocks.ts';
 import { pairOrbits } from './pair-orbits.ts';
 import type { Permutation, PermutationGroup } from './permutation-group.ts';
 

@@ -1,6 +1,6 @@
-import { finiteField } from '../../numerics/finite-field.ts';
-import type { Blocks } from '../blocks.ts';
-import type { Construction } from './candidate.ts';
+import { finiteField } from '../../../numerics/finite-field.ts';
+import type { Blocks } from '../../blocks.ts';
+import type { Construction } from '../candidate.ts';
 
 /**
  * Power residues of GF(t) as base blocks: the subgroup of k (or, with zero added, k − 1) non-zero elements, multiplied by

@@ -1,6 +1,7 @@
-import { finiteField } from '../../numerics/finite-field.ts';
-import type { Blocks } from '../blocks.ts';
-import type { Candidate, Construction } from './candidate.ts';
+import { finiteField } from '../../../numerics/finite-field.ts';
+import type { Blocks } from '../../blocks.ts';
+import type { Candidate, Construction } from '../candidate.ts';
+import { consecutiveClasses } from './round-robin.ts';
 import { subspaces } from './subspaces.ts';
 
 /** (qⁿ − 1)/(q − 1), the number of points of the projective space PG(n − 1, q). */
@@ -105,10 +106,7 @@ export const affineGeometry: Construction = ({ t, k, b }): Candidate | null => {
         if (q ** d !== k || gaussian(n, d, q) * q ** (n - d) !== b) continue;
         const blocks = affineFlats(n, d, q);
         if (blocks) {
-          const size = t / k;
-          const resolution = Array.from({ length: b / size }, (_, c) =>
-            Array.from({ length: size }, (_, i) => c * size + i)
-          );
+          const resolution = consecutiveClasses(t, k, (b * k) / t);
           const construction =
             n === 2
               ? `Points and lines of the affine plane of order ${q}.`

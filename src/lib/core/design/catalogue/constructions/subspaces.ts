@@ -1,5 +1,5 @@
-import type { FiniteField } from '../../numerics/finite-field.ts';
-import { allCombinations } from './all-combinations.ts';
+import type { FiniteField } from '../../../numerics/finite-field.ts';
+import { allCombinations } from '../all-combinations.ts';
 
 /** A vector over a finite field, one field element a coordinate. */
 type Vector = readonly number[];

@@ -1,4 +1,4 @@
-import type { Blocks } from '../blocks.ts';
+import type { Blocks } from '../../blocks.ts';
 
 /** The blocks cut down to some of the points, which are renumbered 0, 1, … in their order. */
 function restrict(blocks: Blocks, points: readonly number[]): Blocks {

@@ -1,6 +1,6 @@
-import type { Blocks } from '../blocks.ts';
-import { allCombinations, combinationCount } from './all-combinations.ts';
-import type { Construction } from './candidate.ts';
+import type { Blocks } from '../../blocks.ts';
+import { allCombinations, combinationCount } from '../all-combinations.ts';
+import type { Construction } from '../candidate.ts';
 
 /** Treatments, sessions and slots more than this are not listed by all combinations. */
 const MOST_COMBINATIONS = 20_000;
