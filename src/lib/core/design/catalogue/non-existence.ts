@@ -2,7 +2,14 @@ import { bruckRyserChowla } from './bruck-ryser-chowla.ts';
 import type { Parameters } from './parameters.ts';
 
 export type NonExistenceTheorem =
-  'divisibility' | 'fisher' | 'bruck-ryser-chowla' | 'hall-connor' | 'affine-plane' | 'computer-search';
+  | 'divisibility'
+  | 'bose'
+  | 'equal-halves'
+  | 'fisher'
+  | 'bruck-ryser-chowla'
+  | 'hall-connor'
+  | 'affine-plane'
+  | 'computer-search';
 
 /** Parameter sets (t, k, λ with 2k ≤ t) that an exhaustive search in print has ruled out. */
 const COMPUTER_SEARCHES: readonly { t: number; k: number; lambda: number; source: string }[] = [

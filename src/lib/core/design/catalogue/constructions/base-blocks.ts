@@ -1,5 +1,5 @@
 import type { Construction } from '../candidate.ts';
-import { develop, type BaseBlock } from '../orbits/orbit-search.ts';
+import { develop, type BaseBlock } from '../orbits/develop.ts';
 import { generateGroup, scale, shift, type PermutationGroup } from '../orbits/permutation-group.ts';
 import { abelianGroup } from '../orbits/abelian-group.ts';
 import { affineOnPairsAndPlanes } from '../orbits/affine-line.ts';
