@@ -1,4 +1,4 @@
-import { Workbox } from 'workbox-window';
+import type { Workbox } from 'workbox-window';
 import { whoIsBusy } from './busy.ts';
 
 export type OfflineState = 'unsupported' | 'preparing' | 'ready' | 'failed';
@@ -40,9 +40,11 @@ class Updates {
       return;
     }
     navigator.serviceWorker.addEventListener('controllerchange', () => void this.#controllerChanged());
-    this.#workbox = new Workbox(scriptUrl, { updateViaCache: 'none' });
-    this.#workbox.addEventListener('waiting', () => void this.#nameWaiting());
     try {
+      // Later than the screen: the first load of a route does without it.
+      const { Workbox } = await import('workbox-window');
+      this.#workbox = new Workbox(scriptUrl, { updateViaCache: 'none' });
+      this.#workbox.addEventListener('waiting', () => void this.#nameWaiting());
       const registration = (await this.#workbox.register()) ?? null;
       this.#registration = registration;
       if (registration) this.#watch(registration);
