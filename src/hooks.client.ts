@@ -10,7 +10,9 @@ const factory = (globalThis as { trustedTypes?: PolicyFactory }).trustedTypes;
 factory?.createPolicy('default', {
   createScriptURL(address) {
     const url = new URL(address, location.href);
-    const own = url.origin === location.origin && /(^|\/)(_app\/immutable\/|service-worker\.js$)/.test(url.pathname);
+    // The development server serves workers from their sources.
+    const built = import.meta.env.DEV || /(^|\/)(_app\/immutable\/|service-worker\.js$)/.test(url.pathname);
+    const own = url.origin === location.origin && built;
     if (!own) throw new TypeError(`refused to load a script from ${url.href}`);
     return address;
   }
