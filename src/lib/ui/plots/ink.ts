@@ -38,7 +38,10 @@ export const ink: Record<Role, Attributes> = {
   'cell-1': fill('act-wash'),
   'cell-2': fill('act', { 'fill-opacity': 0.55 }),
   'cell-3': fill('act'),
-  'cell-none': fill('ruin-wash')
+  'cell-none': fill('ruin-wash'),
+  'cell-text': type('act-ink', 13.5, 600),
+  ring: stroke('ink', 2),
+  beam: fill('ink')
 };
 
 /** Element name, attributes and text of one mark: what any renderer needs. */
@@ -97,6 +100,7 @@ export const paper: Record<string, string> = {
   'rule-strong': '#767b7b',
   act: '#0a5c63',
   'act-wash': '#dcebe9',
+  'act-ink': '#ffffff',
   ruin: '#a3271c',
   'ruin-wash': '#f8e0dc'
 };

@@ -29,7 +29,10 @@ export type Role =
   | 'cell-1'
   | 'cell-2'
   | 'cell-3'
-  | 'cell-none';
+  | 'cell-none'
+  | 'cell-text'
+  | 'ring'
+  | 'beam';
 
 export type Mark =
   | { kind: 'line'; x1: number; y1: number; x2: number; y2: number; role: Role }

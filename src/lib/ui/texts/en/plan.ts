@@ -1,0 +1,207 @@
+export const plan = {
+  title: 'Plan',
+  heading: 'Plan the comparison',
+  lead: 'Say what is compared and what holds it. The choices beside follow at every change.',
+  none: {
+    title: 'No campaign is open',
+    body: 'A plan belongs to a campaign. Open one, or start a new one.',
+    act: 'To the campaigns'
+  },
+  missing: {
+    title: 'This campaign is not on this device',
+    body: 'The address names a campaign that is not stored here. If another device holds it, export its campaign file there and open it here.'
+  },
+  loading: 'Opening the campaign …',
+  saved: 'Draft stored on this device',
+  saving: 'Storing the draft …',
+  notSaved: 'The draft could not be stored. What you typed stays on this screen: keep the page open and try again.',
+  again: 'Try again',
+  part: { sound: 'settled', open: (n: number) => `${n} to settle` },
+
+  what: {
+    heading: 'What is compared?',
+    why: 'Everything else follows from this list. Technicians see codes, not these names, unless you say otherwise below.',
+    title: 'Title of the campaign',
+    titleHint: 'As it stands on load sheets and the report.',
+    question: 'The question, in one or two sentences',
+    questionHint: 'Written before the first run, so that the answer cannot bend it.',
+    treatments: 'Treatments',
+    name: 'Name',
+    specimens: 'Specimens at hand',
+    specimensShort: 'Specimens',
+    specimensHint: 'leave empty if there are enough',
+    control: 'Control',
+    note: 'Note',
+    paste: 'Paste a list or columns from a spreadsheet into any name: name, specimens, control, note.',
+    add: 'Add a treatment',
+    remove: (name: string) => `Take out ${name}`,
+    unnamed: (n: number) => `treatment ${n}`,
+    count: (n: number) => (n === 1 ? '1 treatment' : `${n} treatments`),
+    pasted: (n: number) =>
+      n === 1 ? '1 treatment taken from the clipboard' : `${n} treatments taken from the clipboard`,
+    apart: 'Pairs that must not share a session',
+    apartHint: 'For instance because one would soil the other.',
+    apartAdd: 'Keep two apart',
+    apartOf: (n: number) => `Pair ${n}`,
+    apartRemove: (n: number) => `Take out pair ${n}`,
+    and: 'and'
+  },
+  template: {
+    heading: 'Begin with the frame of an earlier campaign',
+    why: 'Treatments, machine, readings, formula, limits and precautions are taken over; nothing that was recorded.',
+    label: 'Earlier campaign',
+    act: 'Take it over',
+    replaces: 'This replaces what is typed here so far.'
+  },
+  machine: {
+    heading: 'What holds it?',
+    why: 'One loading of the machine is one session. Draw it as it stands, so that the bench screen looks like it.',
+    name: 'Name of the machine',
+    nameOf: (n: number) => `Machine ${n}`,
+    slots: 'Slots',
+    layout: 'How the slots lie',
+    row: 'in a row',
+    ring: 'in a ring',
+    grid: 'in a grid',
+    columns: 'Columns',
+    drawing: 'The machine as it stands: tap a slot to take it out of service',
+    slotName: (n: number) => `Name of slot ${n}`,
+    inService: (name: string) => `Slot ${name} is in service`,
+    outOfService: (name: string) => `Slot ${name} is out of service`,
+    out: 'out',
+    rename: 'Name the slots',
+    add: 'Add a machine',
+    remove: (name: string) => `Take out ${name}`,
+    minutes: 'Minutes for one session',
+    minutesHint: 'Loading, run, readings: what the time of the choices is reckoned from.',
+    run: 'Minutes of the run itself',
+    runHint: 'Shown as a countdown at the bench.',
+    perShift: 'Sessions in one shift',
+    perShiftHint: 'On each machine.',
+    most: 'Most sessions you can afford',
+    mostHint: 'Leave empty to be shown the whole range.',
+    resolvable: 'Each shift is to hold every treatment once',
+    resolvableHint: 'Then a difference between shifts cannot touch the comparison.'
+  },
+  measure: {
+    heading: 'What is measured?',
+    why: 'The number that is compared, and the readings it is made of.',
+    label: 'What is compared',
+    labelHint: 'For instance: loss of film thickness.',
+    unit: 'Unit',
+    decimals: 'Decimals',
+    source: 'How it comes about',
+    sources: { read: 'read as it is', formula: 'computed from readings', rank: 'a rank or score' },
+    formula: 'Formula',
+    formulaHint:
+      'With the names of the readings and constants below, + − * / ^ and brackets. A point is the decimal sign.',
+    functions: 'Functions',
+    units: {
+      checking: 'Checking the formula …',
+      same: (unit: string) => (unit === '' ? 'Units fit: a plain number.' : `Units fit: the formula gives ${unit}.`),
+      factor: (found: string, wanted: string, factor: string) =>
+        `Units fit: the formula gives ${found || 'a plain number'}; times ${factor} that is ${wanted || 'a plain number'}.`,
+      equal: (found: string, wanted: string) =>
+        `Units fit: the formula gives ${found}, which is ${wanted} as it stands.`
+    },
+    try: 'Try it',
+    tryHint: 'Type readings as they would come and see what follows. Nothing of this is recorded.',
+    tryGives: (value: string) => `gives ${value}`,
+    tryFor: (name: string) => `Trial value of ${name}`,
+    readings: 'Readings',
+    readingName: 'Name in formula',
+    readingLabel: 'At the bench',
+    addReading: 'Add a reading',
+    removeReading: (name: string) => `Take out the reading ${name}`,
+    constants: 'Constants',
+    constantLabel: 'Meaning',
+    value: 'Value',
+    addConstant: 'Add a constant',
+    removeConstant: (name: string) => `Take out the constant ${name}`,
+    unnamed: 'without name',
+    when: 'When it is taken',
+    whens: { before: 'before the start', after: 'after the stop', at: 'during the run, at' },
+    point: 'At',
+    pointUnit: 'Unit of that point',
+    repeats: 'Times per specimen',
+    resolution: 'Smallest step of the instrument',
+    mayStop: 'May stop at a limit (“≥ 10 000”)',
+    direction: 'Better is',
+    directions: { lower: 'lower', higher: 'higher', target: 'near a target' },
+    target: 'Target',
+    possible: 'Cannot be outside',
+    expected: 'Look again outside',
+    from: 'from',
+    to: 'to',
+    scatter: 'Expected scatter in one session',
+    scatterHint: 'Standard deviation between like specimens in one session, from earlier work.',
+    difference: 'Smallest difference that matters',
+    differenceHint: 'What you would act on.',
+    margin: 'Counts as equal to the control within',
+    more: 'Limits and details',
+    add: 'Add another measurand',
+    remove: (name: string) => `Take out ${name}`,
+    nth: (n: number) => `Measurand ${n}`
+  },
+  conditions: {
+    heading: 'What is noted in each session?',
+    why: 'Machine settings and the room: what may explain an odd session later.',
+    label: 'What',
+    kind: 'Kind',
+    kinds: { number: 'a number', text: 'a word' },
+    window: 'Allowed',
+    add: 'Add a setting or condition',
+    remove: (name: string) => `Take out ${name}`,
+    none: 'Nothing yet. Temperature, humidity, batch of the abrasive and pressure are usual.'
+  },
+  care: {
+    heading: 'What can hurt, what can spoil?',
+    why: 'Shown before the first loading of each session. The laboratory’s procedures, the machine’s manual and local rules take precedence.',
+    precautions: 'Precautions, one a line',
+    ruin: 'Reasons for a ruined run, one a line',
+    ruinHint: 'Offered at the bench, beside own words.',
+    operator: 'Who usually works at the bench',
+    open: 'Technicians may see the names of the treatments',
+    openHint: 'Codes keep hopes out of the readings.'
+  },
+  answer: {
+    heading: 'Which answer counts?',
+    why: 'Fixed before the first reading, so that nobody chooses it after seeing the numbers.',
+    measurand: 'Measurand',
+    comparison: 'Comparison',
+    comparisons: {
+      'all-pairs': 'every treatment with every other',
+      'to-control': 'each treatment with the control',
+      'to-best': 'each treatment with the best'
+    },
+    adjustment: 'Adjusted for many comparisons by',
+    adjustments: {
+      tukey: 'Tukey–Kramer',
+      holm: 'Holm',
+      none: 'nothing (each pair by itself)',
+      dunnett: 'Dunnett',
+      hsu: 'Hsu'
+    },
+    sessions: 'Sessions taken as',
+    sessionKinds: {
+      fixed: 'fixed: compare inside sessions only',
+      random: 'random: use differences between sessions too'
+    },
+    alpha: 'Risk of a false alarm (α)',
+    slot: 'Allow for differences between slots',
+    slotHint: 'Costs one degree of freedom less than there are slots.'
+  },
+  starters: {
+    precautions: [
+      'Stop the machine and secure it against starting before you reach in.',
+      'Guards closed before the start.',
+      'Wear the protective equipment that the laboratory prescribes.'
+    ],
+    ruinReasons: [
+      'Specimen moved or came loose',
+      'Machine stopped by itself',
+      'Wrong setting',
+      'Specimen damaged before the run'
+    ]
+  }
+};

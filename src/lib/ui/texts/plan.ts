@@ -1,0 +1,5 @@
+import { plan as de } from './de/plan.ts';
+import { plan as en } from './en/plan.ts';
+import { inLanguage } from './locale.svelte.ts';
+
+export const planTexts = inLanguage({ en, de });

@@ -1,0 +1,5 @@
+import { print as de } from './de/print.ts';
+import { print as en } from './en/print.ts';
+import { inLanguage } from './locale.svelte.ts';
+
+export const printTexts = inLanguage({ en, de });
