@@ -37,7 +37,7 @@ const problemOf = (t: number, sizes: number[], free = false): SearchProblem => (
 
 const found = (problem: SearchProblem, steps: number, seed: string, starts: number[][] = []) => {
   const { run, best } = searchDesign(problem, starts, steps, seed);
-  for (const progress of run) expect(progress.steps).toBeLessThanOrEqual(steps);
+  for (const progress of run) expect(progress.allowed).toBe(steps);
   return best()!;
 };
 

@@ -25,6 +25,8 @@ export interface DesignState {
   value: number;
   /** Changes made since everything was last recomputed. */
   changes: number;
+  /** Elementary operations spent so far, about; the measure of effort, since it is the same on every device. */
+  work: number;
   readonly weights: Float64Array | null;
   /** Room for the vectors of one change: Mu, Mz, Qu, Qz and their transforms. */
   readonly x1: Float64Array;
@@ -70,6 +72,7 @@ export function designState(problem: SearchProblem): DesignState {
     Q: new Float64Array(t * t),
     value: Infinity,
     changes: 0,
+    work: 0,
     weights,
     x1: vector(),
     x2: vector(),
@@ -108,6 +111,7 @@ export function blocksOf(state: DesignState): number[][] {
 export function refresh(state: DesignState): boolean {
   const { t, M, Q, weights } = state;
   state.changes = 0;
+  state.work += 6 * t ** 3;
   state.value = Infinity;
   const inverse = moorePenrose(informationMatrix(blocksOf(state), t), t);
   if (!inverse) return false;
@@ -173,6 +177,7 @@ export function applyChange(state: DesignState, change: PricedChange): void {
   }
   state.value -= (c * a2 - 2 * beta * b2 + a * c2) / determinant;
   state.changes++;
+  state.work += 12 * t * t;
   if (state.changes >= REFRESH) refresh(state);
 }
 

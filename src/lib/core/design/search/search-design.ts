@@ -12,9 +12,10 @@ export const SEARCH_ALGORITHM = { name: 'interchange-search', version: 1 } as co
 
 /** Where a search stands. */
 export interface SearchProgress {
+  /** Work spent and allowed, in thousands of elementary operations. */
   steps: number;
   allowed: number;
-  /** Best value of the criterion so far. */
+  /** Best value of the criterion so far; Infinity while there is none. */
   value: number;
 }
 
@@ -29,23 +30,25 @@ export interface SearchOutcome {
 const HOT = 0.15;
 const COLD = HOT / 50;
 
-/** Lengths of the annealing runs in parts of the allowed steps; the rest goes to the first descents. */
-const RUNS = [0.15, 0.3, 0.5];
+/** Lengths of the annealing runs in parts of the work allowed, the last takes what is left. */
+const RUNS = [0.15, 0.3, 1];
 
-/** Visits between two reports of progress. */
-const SLICE = 64;
+/** Visits between two looks at the work spent. */
+const SLICE = 32;
+
+/** Operations in a step. */
+const STEP = 1000;
 
 /**
  * Searches for the design with the least value of the problem's criterion: steepest descent from the given starts and
  * from random ones, then simulated annealing by heat-bath exchanges between two sessions drawn at random, in runs of
- * growing length, each followed by a descent. A step is one visit of a pair of sessions (or of one session, where
- * replications may change).
+ * growing length, each followed by a descent.
  *
- * It is a generator: it hands over its progress every 64 steps and can be stopped there; `best()` of the handle then
- * tells the best design so far. Nothing depends on the time.
+ * The effort is counted in steps of a thousand elementary operations, so nothing depends on the time. It is a generator:
+ * it hands over its progress every 32 visits and can be left there; `best()` then tells the best design so far.
  *
  * @param starts cells of designs to begin with, of the problem's sizes, controls last in each session
- * @param steps steps allowed
+ * @param allowed steps allowed
  * @param seed any text
  *
  * **Source**: Kirkpatrick, Gelatt & Vecchi (1983), Science 220, 671–680; John & Whitaker (1993), Construction of resolvable
@@ -55,14 +58,13 @@ const SLICE = 64;
 export function searchDesign(
   problem: SearchProblem,
   starts: readonly ArrayLike<number>[],
-  steps: number,
+  allowed: number,
   seed: string
 ): { run: Generator<SearchProgress, void>; best: () => SearchOutcome | null } {
   const random = seededRandom(`${SEARCH_ALGORITHM.name} ${SEARCH_ALGORITHM.version} ${seed}`);
   const state = designState(problem);
   const bestCells = new Int32Array(state.cells.length);
   let bestValue = Infinity;
-  let done = 0;
 
   const keep = (): void => {
     if (state.value < bestValue * (1 - 1e-12)) {
@@ -70,60 +72,73 @@ export function searchDesign(
       bestCells.set(state.cells);
     }
   };
+  const spent = (): number => state.work / STEP;
+  const progress = (): SearchProgress => ({ steps: Math.floor(spent()), allowed, value: bestValue });
   const visit = visitor(problem, state, random);
 
-  function* descend(limit: number): Generator<SearchProgress, void> {
-    // Still when as many visits in a row as there are pairs changed nothing.
-    const patience = Math.min(limit, problem.groupOf ? 4 * state.b : Math.max(40, (state.b * (state.b - 1)) / 2));
+  /** Until as many visits in a row as there are pairs changed nothing. */
+  function* descend(visits: number): Generator<SearchProgress, void> {
+    const patience = Math.min(visits, problem.groupOf ? 4 * state.b : Math.max(40, (state.b * (state.b - 1)) / 2));
     let idle = 0;
-    for (let n = 0; n < limit && idle < patience; n++) {
+    for (let n = 1; n <= visits && idle < patience; n++) {
       idle = visit(0) ? 0 : idle + 1;
-      if (++done % SLICE === 0) {
-        keep();
-        yield { steps: done, allowed: steps, value: bestValue };
-      }
+      if (n % SLICE !== 0) continue;
+      keep();
+      yield progress();
+      if (spent() >= allowed) return;
     }
     keep();
   }
 
   function* anneal(length: number): Generator<SearchProgress, void> {
-    const scale = state.value / (state.cells.length * (state.cells.length / state.b));
-    const fall = (COLD / HOT) ** (1 / Math.max(1, length / SLICE));
-    let temperature = HOT * scale;
-    for (let n = 0; n < length; n++) {
-      if (visit(temperature)) keep();
-      if (++done % SLICE === 0) {
-        temperature *= fall;
-        yield { steps: done, allowed: steps, value: bestValue };
-      }
+    const begin = spent();
+    const end = Math.min(allowed, begin + length);
+    const hot = (HOT * state.value) / (state.cells.length * (state.cells.length / state.b));
+    while (spent() < end) {
+      const temperature = hot * coolest((spent() - begin) / (end - begin));
+      for (let n = 0; n < SLICE; n++) if (visit(temperature)) keep();
+      yield progress();
     }
   }
 
   function* run(): Generator<SearchProgress, void> {
-    const quick = Math.ceil(6 * state.b);
-    for (const cells of starts) if (loadCells(state, cells)) yield* descend(Math.min(quick, steps - done));
+    const quick = 6 * state.b;
+    for (const cells of starts) if (loadCells(state, cells)) yield* descend(quick);
     for (const part of RUNS) {
-      if (done > 0 && done >= steps) return;
+      if (spent() >= allowed && bestValue < Infinity) return;
       if (!loadRandom(problem, state, random)) {
         if (bestValue === Infinity) return;
         loadCells(state, bestCells);
       }
       keep();
-      yield* descend(Math.min(quick, steps - done));
-      yield* anneal(Math.min(Math.floor(part * steps), steps - done));
-      yield* descend(steps - done);
+      yield* descend(quick);
+      yield* anneal(part * allowed);
+      yield* descend(Infinity);
     }
-    if (bestValue < Infinity) loadCells(state, bestCells);
-    yield* anneal(Math.max(0, steps - done));
   }
 
   const best = (): SearchOutcome | null => {
     if (bestValue === Infinity) return null;
     const final = designState(problem);
     loadCells(final, bestCells);
-    return { blocks: blocksOf(final), value: final.value, steps: done };
+    return { blocks: blocksOf(final), value: final.value, steps: Math.floor(spent()) };
   };
   return { run: run(), best };
+}
+
+/** (COLD/HOT)^x for x in 0 … 1, by square roots alone, so that every engine gives the same bits. */
+function coolest(x: number): number {
+  let result = 1;
+  let factor = COLD / HOT;
+  for (let bit = 0, rest = x; bit < 20; bit++) {
+    if (rest >= 1) {
+      result *= factor;
+      rest -= 1;
+    }
+    rest *= 2;
+    factor = Math.sqrt(factor);
+  }
+  return result;
 }
 
 /** Fills the state with a random connected design; false when none was found. */

@@ -78,6 +78,7 @@ export function visitPair(
   const sp = share[p]!;
   const sq = share[q]!;
   const h = 0.5 * (sp + sq);
+  state.work += 4 * (kp + kq) ** 2 + 24 * kp * kq;
   let wMw = 0;
   let wQw = 0;
   for (let x = 0; x < kp; x++) {

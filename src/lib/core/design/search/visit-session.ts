@@ -35,6 +35,8 @@ export function visitSession(
   const end = start[p + 1]!;
   const s = share[p]!;
   const h = 0.5 * s;
+  const k = end - p0;
+  state.work += 4 * k * k + NEWCOMERS * 40 * k;
   let nMn = 0;
   let nQn = 0;
   for (let x = p0; x < end; x++) {
