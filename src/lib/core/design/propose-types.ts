@@ -45,6 +45,8 @@ export interface DesignRequest {
   difference: number | null;
   /** Error probability α of a two-sided test. */
   alpha: number;
+  /** Which detectable difference the recommendation goes by; Tukey's when nothing is said. */
+  adjustment?: 'unadjusted' | 'tukey' | undefined;
   /** Minutes of one session; null when not known. */
   minutesPerSession: number | null;
   /** Any text; the same request gives the same choices, on every device. */
@@ -63,13 +65,19 @@ export interface Construction {
   text: string;
   /** Publication of the method. */
   source: string;
-  /** Steps that were made and allowed, when it was searched for: the same seed and steps give the same design. */
+  /**
+   * Steps (of a thousand elementary operations) that were spent and allowed when it was searched for: the same request with
+   * the same seed gives the same design.
+   */
   search: { seed: string; steps: number; allowed: number; version: number } | null;
 }
 
-/** A bound that no design of these sizes can pass. */
+/**
+ * A bound that no design of these sizes can pass. With controls it bounds the variance that counts (see ControlRequest)
+ * instead of the A-value.
+ */
 export interface Bound {
-  /** Least possible A-value. */
+  /** Least possible value. */
   aValue: number;
   /** Which argument gives it; the largest of those that apply is shown. */
   by: 'mean' | 'concurrence' | 'dual' | 'resolvable' | 'control';
@@ -129,7 +137,7 @@ export interface DesignChoice {
   /** Average variance of a difference in units of σ². */
   aValue: number;
   bound: Bound;
-  /** bound.aValue / aValue, at most 1; 1 is proven best. */
+  /** Bound divided by what it bounds, at most 1; 1 is proven best. */
   ofBound: number;
   /** With controls: average variances in units of σ², apart. */
   control: { testControl: number; testTest: number } | null;
