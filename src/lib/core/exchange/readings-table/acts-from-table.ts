@@ -10,12 +10,14 @@ export type TableAct = { [K in Kind]: { kind: K; data: DataOf<K> } }[Kind];
  * Checked by: test/core/exchange/readings-table/readings-table.test.ts
  */
 export function actsFromTable(campaign: TableCampaign): TableAct[] {
-  const { issued, readings, ruined } = campaign;
+  const { issued, readings, ruined, names } = campaign;
   const acts: TableAct[] = [
     { kind: 'campaign-created', data: { title: issued.plan.title, demo: false } },
     { kind: 'plan-issued', data: issued }
   ];
   const bySession = new Map<string, TableAct[]>(issued.sessions.map((session) => [session.id, []]));
+  for (const { session, text } of names)
+    bySession.get(session)?.push({ kind: 'noted', data: { about: 'session', session, slot: null, text } });
   for (const reading of readings)
     bySession.get(reading.session)?.push({
       kind: 'reading-recorded',

@@ -32,6 +32,8 @@ export interface TableCampaign {
   issued: IssuedPlan;
   readings: TableReading[];
   ruined: { session: string; slot: number; reason: string }[];
+  /** What the file calls a session, where that is not its number in loading order. */
+  names: { session: string; text: string }[];
   /** Cells without a value. */
   missing: number;
 }
@@ -266,7 +268,10 @@ export function planFromTable(
     sessions: planned,
     spares: []
   };
-  return ok({ issued, readings, ruined, missing });
+  const names = [...sessions.values()].flatMap((session, j) =>
+    session.name === String(j + 1) ? [] : [{ session: session.id, text: `${headOf(mapping.session)}: ${session.name}` }]
+  );
+  return ok({ issued, readings, ruined, names, missing });
 }
 
 /** By counting: equal replication, equal size, no treatment twice in a session, every pair together equally often. */
