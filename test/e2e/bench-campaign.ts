@@ -115,3 +115,9 @@ export async function eventsOf(page: Page): Promise<CampaignEvent[]> {
   });
   return texts.map((text) => JSON.parse(text) as CampaignEvent).sort((a, b) => a.seq - b.seq);
 }
+
+/** Types into whatever has the focus and presses Enter, as a keyboard, a gauge or a hand scanner does. */
+export async function enter(page: Page, text: string): Promise<void> {
+  await page.keyboard.type(text);
+  await page.keyboard.press('Enter');
+}

@@ -1,6 +1,7 @@
 import type { Bench } from '#lib/state/bench/bench.svelte.ts';
 import { benchTexts } from '#lib/ui/texts/bench.ts';
 import { quantityAsTyped } from './words.ts';
+import type { Mood } from '#lib/ui/bench/view.ts';
 import { unitText } from '#lib/ui/format/unit-text.ts';
 
 export interface Act {
@@ -62,6 +63,16 @@ export function sentenceOf({ bench, nameOf, over, following, faulty }: At): stri
     case 'closed':
       return t.say.closed;
   }
+}
+
+/** What kind of sentence that is; the band's colour and shape repeat it. */
+export function moodOf({ bench, over, following, faulty }: At): Mood {
+  const { step, entry, loading } = bench;
+  if (faulty || entry.fault || loading.fault) return 'fault';
+  if (entry.doubt || loading.verdict) return 'look';
+  if (following) return 'wait';
+  if (step.kind === 'running') return over || bench.place ? 'do' : 'wait';
+  return step.kind === 'closed' ? 'done' : 'do';
 }
 
 /** The one large button. */

@@ -3,6 +3,7 @@ import type { ReadingNotUnderstood, UnderstoodReading } from '#lib/core/campaign
 import type { Plan, Range } from '#lib/core/campaign/plan.ts';
 import type { BenchWords } from '#lib/state/bench/bench-words.ts';
 import { writtenPlain, writtenValue } from '#lib/ui/format/reading-text.ts';
+import { unitText } from '#lib/ui/format/unit-text.ts';
 import { writer } from '#lib/ui/format/writer.svelte.ts';
 import { benchTexts } from '#lib/ui/texts/bench.ts';
 import { findingTexts } from '#lib/ui/texts/findings.ts';
@@ -39,26 +40,28 @@ export function rangeText(range: Range, of: Quantity): string {
 /** What a check says, in plain words, with what was expected. */
 export function findingText(finding: Finding, of: Quantity, plan: Plan | null): string {
   const t = findingTexts();
-  const value = quantity(finding.value, of);
+  // As few digits as say it: 35 to 55 g, not 35.0000 to 55.0000 g.
+  const natural = { unit: of.unit, decimals: 0 };
+  const value = quantity(finding.value, natural);
   switch (finding.check) {
     case 'impossible':
     case 'unexpected':
-      return t[finding.check](value, finding.side, rangeText(finding.range, of));
+      return t[finding.check](value, finding.side, rangeText(finding.range, natural));
     case 'slip': {
       const [first] = finding.candidates;
-      return first ? t.slip(value, quantity(first.value, of), first.how) : '';
+      return first ? t.slip(quantity(first.value, natural), first.how) : '';
     }
     case 'stuck':
       return t.stuck(value, finding.times);
     case 'surprise': {
       const measurand = plan?.measurands.find(({ id }) => id === finding.measurand);
-      const its = measurand ?? of;
+      const its = measurand ? { decimals: measurand.decimals, unit: unitText(measurand.unit) } : of;
       const low = quantity(finding.low, { ...its, unit: '' });
       return t.surprise(measurand?.label ?? '', quantity(finding.value, its), low, quantity(finding.high, its));
     }
     case 'condition': {
       const condition = plan?.conditions.find(({ id }) => id === finding.condition);
-      return t.condition(condition?.label ?? '', value, finding.side, rangeText(finding.window, of));
+      return t.condition(condition?.label ?? '', value, finding.side, rangeText(finding.window, natural));
     }
   }
 }
@@ -68,8 +71,9 @@ export const conditionQuantity = (unit: string): Quantity => ({ unit, decimals: 
 
 export function benchWords(plan: () => Plan | null): BenchWords {
   return {
-    finding: (finding, definition) => findingText(finding, definition, plan()),
-    slipTaken: (typed, taken, definition) => findingTexts().slipTaken(typed, quantity(taken, definition)),
+    finding: (finding, definition) => findingText(finding, { ...definition, unit: unitText(definition.unit) }, plan()),
+    slipTaken: (typed, taken, { unit }) =>
+      findingTexts().slipTaken(typed, quantity(taken, { unit: unitText(unit), decimals: 0 })),
     condition: (finding, condition) => findingText(finding, conditionQuantity(condition.unit), plan())
   };
 }

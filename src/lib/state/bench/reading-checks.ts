@@ -6,16 +6,16 @@ import type { UnderstoodReading } from '#lib/core/campaign/parse-reading.ts';
 import type { CampaignState } from '#lib/core/campaign/state.ts';
 import type { EntryPlace } from './reading-entry.svelte.ts';
 
-/** What the checks that need no model say about a value, the most telling first. */
+/** What the checks that need no model say about a value. */
 export function checksFor(state: CampaignState, place: EntryPlace, understood: UnderstoodReading): Finding[] {
   const { definition } = place;
   const { value, plain, limit } = understood;
   const findings: Finding[] = [];
   const range = checkRange(value, definition.possible, definition.expected);
   if (range) {
+    findings.push(range);
     const candidates = checkSlip(value, plain, definition.expected);
     if (candidates.length > 0) findings.push({ check: 'slip', value, candidates });
-    findings.push(range);
   }
   if (limit === 'none') {
     const stuck = checkStuck(value, readingsBefore(state, definition.id), definition.resolution, null);

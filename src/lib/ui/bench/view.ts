@@ -119,3 +119,5 @@ export interface GaugeView {
   line: string | null;
   fault: string | null;
 }
+
+export type Mood = 'do' | 'look' | 'fault' | 'wait' | 'done';

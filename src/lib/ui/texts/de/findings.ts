@@ -13,11 +13,11 @@ export const findings: typeof en = {
           : '',
   impossible: (value, side, range) => `${value} kann nicht sein: ${seite[side]} dem Möglichen (${range}).`,
   unexpected: (value, side, range) => `${value} liegt ${seite[side]} dem Erwarteten (${range}).`,
-  slip: (value, meant, how) =>
+  slip: (meant, how) =>
     ({
-      decimal: `${value} kann ein verrutschtes Komma sein: ${meant} wäre zu erwarten.`,
-      inch: `${value} kann in der falschen Einheit stehen (Zoll und Millimeter): ${meant} wäre zu erwarten.`,
-      'swapped-digits': `In ${value} können zwei Ziffern vertauscht sein: ${meant} wäre zu erwarten.`
+      decimal: `Komma verrutscht? ${meant} wäre zu erwarten.`,
+      inch: `Zoll und Millimeter verwechselt? ${meant} wäre zu erwarten.`,
+      'swapped-digits': `Zwei Ziffern vertauscht? ${meant} wäre zu erwarten.`
     })[how],
   slipTaken: (typed, taken) => `${typed} wurde getippt; ${taken} wurde angeboten und übernommen.`,
   stuck: (value, times) =>

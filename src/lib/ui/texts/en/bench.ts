@@ -1,3 +1,5 @@
+import { inSentence } from '../../format/unit-text.ts';
+
 /** A short name is only a number; a long one says itself what it is. */
 const place = (name: string) => (name.length <= 3 ? `slot ${name}` : name);
 const Place = (name: string) => (name.length <= 3 ? `Slot ${name}` : name);
@@ -17,9 +19,9 @@ export const bench = {
     prepare: 'Before loading: precautions and conditions.',
     preparePlain: 'Before loading: read the precautions.',
     load: (code: string, slot: string) => `Put specimen ${code} into ${place(slot)}.`,
-    read: (label: string, slot: string) => `${Place(slot)}: enter ${label}.`,
+    read: (label: string, slot: string) => `${Place(slot)}: enter ${inSentence(label)}.`,
     readRepeat: (label: string, slot: string, repeat: number, of: number) =>
-      `${Place(slot)}: enter ${label}, ${repeat} of ${of}.`,
+      `${Place(slot)}: enter ${inSentence(label)}, ${repeat} of ${of}.`,
     start: 'All is loaded. Close the guards, then start.',
     running: 'The machine is running.',
     runningOver: 'The run is over. Stop the machine, then take the readings.',

@@ -12,11 +12,11 @@ export const findings = {
     `${value} cannot be: it is ${side} what is possible (${range}).`,
   unexpected: (value: string, side: 'below' | 'above', range: string) =>
     `${value} is ${side} what was expected (${range}).`,
-  slip: (value: string, meant: string, how: 'decimal' | 'inch' | 'swapped-digits') =>
+  slip: (meant: string, how: 'decimal' | 'inch' | 'swapped-digits') =>
     ({
-      decimal: `${value} may be a slip of the decimal sign: ${meant} would be expected.`,
-      inch: `${value} may be in the wrong unit (inch and millimetre): ${meant} would be expected.`,
-      'swapped-digits': `${value} may have two digits swapped: ${meant} would be expected.`
+      decimal: `A slip of the decimal sign? ${meant} would be expected.`,
+      inch: `Inch and millimetre confused? ${meant} would be expected.`,
+      'swapped-digits': `Two digits swapped? ${meant} would be expected.`
     })[how],
   slipTaken: (typed: string, taken: string) => `${typed} was typed; ${taken} was offered and taken.`,
   stuck: (value: string, times: number) =>
