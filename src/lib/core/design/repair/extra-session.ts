@@ -1,0 +1,188 @@
+import { aValue } from '../a-value.ts';
+import { combinationCount } from '../catalogue/all-combinations.ts';
+import { connectedParts } from '../connected-parts.ts';
+import { informationMatrix } from '../information-matrix.ts';
+import { moorePenrose } from '../moore-penrose.ts';
+
+/** The one more session that brings the A-value down most. */
+export interface ExtraSession {
+  /** A-value with it. */
+  aValue: number;
+  /** Every session that gives this A-value (to a relative 1e-9), each ascending; of a search only the one it found. */
+  sessions: number[][];
+  /** Whether every possible session was priced. */
+  exhaustive: boolean;
+}
+
+/** Elementary operations that an exhaustive answer may take. */
+const EXHAUSTIVE = 1.2e9;
+const TIE = 1e-9;
+
+/**
+ * Returns how much the A-value falls by one more session.
+ *
+ * The session adds `I − J/k` on its treatments to C, the sum of k − 1 rank-one terms vvᵀ with Helmert's contrasts v; each
+ * turns M = C⁺ into `M − Mv vᵀM/(1 + vᵀMv)` and lets the A-value fall by `vᵀQv/(1 + vᵀMv)`, Q = 2/(t − 1)·M². Only the rows and
+ * columns of the session's treatments are needed.
+ *
+ * @param M Moore–Penrose inverse of a connected design's C, t·t
+ * @param Q 2/(t − 1)·M², t·t
+ * @param session its treatments
+ *
+ * Cost: 8 k³.
+ *
+ * **Source**: Sherman & Morrison (1950), Annals of Mathematical Statistics 21, 124–127.
+ * **Checked by** test/core/design/repair/extra-session.test.ts
+ */
+export function fallByExtraSession(M: Float64Array, Q: Float64Array, t: number, session: readonly number[]): number {
+  const k = session.length;
+  const m = new Float64Array(k * k);
+  const n = new Float64Array(k * k);
+  for (let a = 0; a < k; a++) {
+    for (let b = 0; b < k; b++) {
+      m[a * k + b] = M[session[a]! * t + session[b]!]!;
+      n[a * k + b] = Q[session[a]! * t + session[b]!]!;
+    }
+  }
+  const p = new Float64Array(k);
+  const q = new Float64Array(k);
+  let fall = 0;
+  for (let last = 1; last < k; last++) {
+    const unit = 1 / Math.sqrt(last * (last + 1));
+    let vMv = 0;
+    let vQv = 0;
+    for (let a = 0; a < k; a++) {
+      let sum = -last * m[a * k + last]!;
+      let sum2 = -last * n[a * k + last]!;
+      for (let b = 0; b < last; b++) {
+        sum += m[a * k + b]!;
+        sum2 += n[a * k + b]!;
+      }
+      p[a] = unit * sum;
+      q[a] = unit * sum2;
+    }
+    for (let a = 0; a <= last; a++) {
+      const v = a < last ? unit : -last * unit;
+      vMv += v * p[a]!;
+      vQv += v * q[a]!;
+    }
+    const s = 1 / (1 + vMv);
+    fall += s * vQv;
+    for (let a = 0; a < k; a++) {
+      for (let b = 0; b < k; b++) {
+        m[a * k + b]! -= s * p[a]! * p[b]!;
+        n[a * k + b]! += s * (s * vQv * p[a]! * p[b]! - p[a]! * q[b]! - q[a]! * p[b]!);
+      }
+    }
+  }
+  return fall;
+}
+
+/**
+ * Returns the one more session of k treatments that leaves the least A-value, or null when no single session can make
+ * every difference estimable (more parts than slots, or a part without a specimen).
+ *
+ * Every session is priced where that is feasible; else one is built treatment by treatment and improved by exchanges
+ * until none helps. A design that is not connected is refitted for each session that touches all its parts.
+ *
+ * @param blocks sessions with what was kept of them
+ * @param treatments number of treatments t
+ * @param available treatments that still have specimens
+ * @param k slots of the session
+ *
+ * **Checked by** test/core/design/repair/extra-session.test.ts
+ */
+export function bestExtraSession(
+  blocks: readonly (readonly number[])[],
+  treatments: number,
+  available: readonly number[],
+  k: number
+): ExtraSession | null {
+  const t = treatments;
+  const size = Math.min(k, available.length);
+  if (size < 2) return null;
+  const kept = blocks.filter((block) => block.length > 0);
+  const parts = connectedParts(kept, t);
+  const partOf = new Int32Array(t);
+  parts.forEach((part, at) => part.forEach((i) => (partOf[i] = at)));
+  const reachable = parts.every((part) => part.some((i) => available.includes(i)));
+  if (parts.length > size || !reachable) return null;
+
+  const price =
+    parts.length === 1
+      ? pricing(kept, t)
+      : (session: readonly number[]) => {
+          const touched = new Set(session.map((i) => partOf[i]!));
+          return touched.size < parts.length ? Infinity : aValue([...kept, session], t);
+        };
+  const each = parts.length === 1 ? 8 * size ** 3 : t ** 3;
+  const exhaustive = combinationCount(available.length, size) * each <= EXHAUSTIVE;
+  const sorted = [...available].sort((a, b) => a - b);
+  return exhaustive ? cheapest(sorted, size, price) : improved(sorted, size, parts, price);
+}
+
+function pricing(kept: readonly (readonly number[])[], t: number): (session: readonly number[]) => number {
+  const M = moorePenrose(informationMatrix(kept, t), t)!;
+  const Q = new Float64Array(t * t);
+  let now = 0;
+  for (let i = 0; i < t; i++) {
+    now += (2 / (t - 1)) * M[i * t + i]!;
+    for (let l = 0; l <= i; l++) {
+      let sum = 0;
+      for (let m = 0; m < t; m++) sum += M[i * t + m]! * M[l * t + m]!;
+      Q[i * t + l] = Q[l * t + i] = (2 / (t - 1)) * sum;
+    }
+  }
+  return (session) => now - fallByExtraSession(M, Q, t, session);
+}
+
+function cheapest(
+  available: readonly number[],
+  size: number,
+  price: (session: readonly number[]) => number
+): ExtraSession | null {
+  let least = Infinity;
+  let sessions: number[][] = [];
+  const at = Array.from({ length: size }, (_, n) => n);
+  for (;;) {
+    const session = at.map((n) => available[n]!);
+    const value = price(session);
+    if (value < least * (1 - TIE)) sessions = [];
+    if (value <= least * (1 + TIE) && value < Infinity) sessions.push(session);
+    least = Math.min(least, value);
+    let move = size - 1;
+    while (move >= 0 && at[move]! === available.length - size + move) move--;
+    if (move < 0) break;
+    at[move]! += 1;
+    for (let n = move + 1; n < size; n++) at[n] = at[n - 1]! + 1;
+  }
+  return least === Infinity ? null : { aValue: least, sessions, exhaustive: true };
+}
+
+/** Begins with one treatment of each part and the first others; exchanges while the best exchange helps. */
+function improved(
+  available: readonly number[],
+  size: number,
+  parts: readonly (readonly number[])[],
+  price: (session: readonly number[]) => number
+): ExtraSession | null {
+  const needed = parts.length > 1 ? parts.map((part) => part.find((i) => available.includes(i))!) : [];
+  let session = [...needed, ...available.filter((i) => !needed.includes(i))].slice(0, size);
+  let least = price(session);
+  for (;;) {
+    let next: number[] | null = null;
+    for (let n = 0; n < size; n++) {
+      for (const i of available) {
+        if (session.includes(i)) continue;
+        const other = [...session];
+        other[n] = i;
+        const value = price(other);
+        if (value < least * (1 - 1e-12)) [least, next] = [value, other];
+      }
+    }
+    if (!next) break;
+    session = next;
+  }
+  if (least === Infinity) return null;
+  return { aValue: least, sessions: [[...session].sort((a, b) => a - b)], exhaustive: false };
+}
