@@ -1,6 +1,8 @@
+import { readCanary } from '#lib/storage/canary.ts';
 import { getSetting, putSetting, settleSetting } from '#lib/storage/settings.ts';
 import type { StorageFault } from '#lib/storage/fault.ts';
 import { locale, type Locale } from '#lib/ui/texts/locale.svelte.ts';
+import { alarm } from './alarm.svelte.ts';
 import { connection } from './database.svelte.ts';
 import { newId } from './surroundings.ts';
 
@@ -63,12 +65,26 @@ class Device {
     }
     this.#fault = null;
     this.#id = String(id.value);
+    await this.#lookForLosses();
     this.#who = await this.#text('who', '');
     const light = await this.#text('light', 'auto');
     this.#showLight(light === 'light' || light === 'dark' ? light : 'auto');
     const language = await this.#text('locale', navigator.language.startsWith('de') ? 'de' : 'en');
     locale.set(language === 'de' ? 'de' : 'en');
     await this.measure();
+  }
+
+  /**
+   * When events this device remembers are gone, numbers it has given out may stand in files elsewhere: it goes on under a
+   * new id, so that no number is ever given twice.
+   */
+  async #lookForLosses(): Promise<void> {
+    const found = await alarm.check();
+    if (!found.ok || found.value.length === 0 || readCanary()?.device !== this.#id) return;
+    const id = newId();
+    const kept = await putSetting(connection, 'device', id);
+    if (kept.ok) this.#id = id;
+    else this.#fault = kept.error;
   }
 
   async #text(name: string, otherwise: string): Promise<string> {

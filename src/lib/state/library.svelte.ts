@@ -7,9 +7,11 @@ import { type CampaignSummary, summaryOf } from '#lib/core/campaign/summary.ts';
 import { type CampaignFile, type FileError, readCampaignFile } from '#lib/core/exchange/read-campaign-file.ts';
 import { type ImportSummary, summariseImport } from '#lib/core/exchange/summarise-import.ts';
 import { fail, ok, type Result } from '#lib/core/result.ts';
+import { forget, remember } from '#lib/storage/canary.ts';
 import { listCampaigns, removeDemoCampaign } from '#lib/storage/campaigns.ts';
 import type { StorageFault } from '#lib/storage/fault.ts';
 import { append, load, takeIn } from '#lib/storage/journal.ts';
+import { alarm } from './alarm.svelte.ts';
 import { tellOthers, whenOthersWrite } from './channel.ts';
 import { connection } from './database.svelte.ts';
 import type { Act } from './demo/demo-acts.ts';
@@ -70,6 +72,7 @@ class Library {
     const summary = summaryOf(replay([made.value.event]), device.id);
     const written = await append(connection, made.value, summary);
     if (!written.ok) return written;
+    remember(device.id, summary, made.value.event.id, made.value.event.at, false);
     tellOthers(campaign);
     await this.refresh();
     return ok(campaign);
@@ -95,6 +98,7 @@ class Library {
     const summary = summaryOf(replay(sealed.map(({ event }) => event)), device.id);
     const written = await takeIn(connection, sealed.slice(0, -1), last, '', summary);
     if (!written.ok) return written;
+    remember(device.id, summary, last.event.id, last.event.at, false);
     tellOthers(campaign);
     await this.refresh();
     return ok(campaign);
@@ -126,11 +130,13 @@ class Library {
     const data = { sha256: file.sha256, added: fresh.length, known: summary.known, name: name.slice(0, 300) };
     const made = makeEvent({ kind: 'imported', data, who: device.who }, headOf(merged, campaign), stampNow());
     if (!made.ok) return made;
-    const after = replay([...merged, made.value.event], campaign);
-    const written = await takeIn(connection, file.events, made.value, name, summaryOf(after, device.id));
+    const after = summaryOf(replay([...merged, made.value.event], campaign), device.id);
+    const written = await takeIn(connection, file.events, made.value, name, after);
     // Another tab recorded something in between.
     if (!written.ok && written.error.tag === 'stale' && attempt < 3) return this.accept(proposed, attempt + 1);
     if (!written.ok) return written;
+    remember(device.id, after, made.value.event.id, made.value.event.at, false);
+    await alarm.check();
     tellOthers(campaign);
     await this.refresh();
     return ok(campaign);
@@ -139,6 +145,7 @@ class Library {
   /** Takes the invented demo off this device; refuses anything else. */
   async removeDemo(id: string): Promise<Result<boolean, StorageFault>> {
     const removed = await removeDemoCampaign(connection, id);
+    if (removed.ok && removed.value) forget(id);
     await this.refresh();
     return removed;
   }

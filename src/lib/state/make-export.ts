@@ -1,3 +1,4 @@
+import type { CampaignEvent, UnknownEvent } from '#lib/core/campaign/event.ts';
 import { closeFile, fileBody } from '#lib/core/exchange/campaign-file.ts';
 import { type CampaignFile, type FileError, readCampaignFile } from '#lib/core/exchange/read-campaign-file.ts';
 import { fail, ok, type Result } from '#lib/core/result.ts';
@@ -31,6 +32,15 @@ export async function makeExport(campaign: string, title: string): Promise<Resul
   if (!loaded.ok) return loaded;
   const { events, unreadable } = loaded.value;
   if (unreadable.length > 0) return fail({ tag: 'unreadable-records', count: unreadable.length });
+  return fileOf(events, campaign, title);
+}
+
+/** A file of given events, read back, counted and hashed. */
+export async function fileOf(
+  events: readonly (CampaignEvent | UnknownEvent)[],
+  campaign: string,
+  title: string
+): Promise<Result<ExportedFile, ExportFault>> {
   const at = timeNow();
   const body = fileBody(events, { campaign, title, device: device.id, at, app: __APP_VERSION__ });
   const blob = new Blob([closeFile(body, null)], { type: 'application/jsonl' });

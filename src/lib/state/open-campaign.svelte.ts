@@ -9,13 +9,14 @@ import type { CampaignState } from '#lib/core/campaign/state.ts';
 import { summaryOf } from '#lib/core/campaign/summary.ts';
 import { fail, ok, type Result } from '#lib/core/result.ts';
 import { holdUpdates } from '#lib/pwa/busy.ts';
+import { remember } from '#lib/storage/canary.ts';
 import { draftsOf, putDraft } from '#lib/storage/drafts.ts';
 import type { StorageFault } from '#lib/storage/fault.ts';
 import { append, load } from '#lib/storage/journal.ts';
 import { tellOthers, whenOthersWrite } from './channel.ts';
 import { connection } from './database.svelte.ts';
 import { device } from './device.svelte.ts';
-import { type ExportedFile, type ExportFault, makeExport } from './make-export.ts';
+import { type ExportedFile, type ExportFault, fileOf, makeExport } from './make-export.ts';
 import { stampNow } from './surroundings.ts';
 import { type Role, WriterLock } from './writer-lock.ts';
 
@@ -40,6 +41,8 @@ export class OpenCampaign {
   #writes = $state(0);
   #drafts = $state.raw<Drafts>({});
   #draftFault = $state.raw<StorageFault | null>(null);
+  #unsaved = $state.raw<readonly CampaignEvent[]>([]);
+  #faults: readonly { what: string; detail: string }[] = [];
   #queue: Promise<unknown> = Promise.resolve();
   #lock: WriterLock;
   #stopListening: () => void;
@@ -111,18 +114,52 @@ export class OpenCampaign {
     const { event } = made.value;
     this.#replay.apply(event);
     const draft = options.draft ?? null;
-    const written = await append(connection, made.value, summaryOf(this.#replay.state, device.id), draft);
+    const summary = summaryOf(this.#replay.state, device.id);
+    const written = await append(connection, made.value, summary, draft);
     if (!written.ok) {
       this.#replay = replayOf(this.id, this.#events);
-      if (written.error.tag !== 'stale' || attempt >= 3) return written;
+      if (written.error.tag !== 'stale' || attempt >= 3) {
+        this.#failed(event, written.error);
+        return written;
+      }
       await this.#catchUp();
       return this.#write(kind, data, options, attempt + 1);
     }
     this.#events.push(event);
     if (draft !== null) this.#drafts = without(this.#drafts, draft);
     this.#show();
+    remember(device.id, summary, event.id, event.at, kind === 'exported');
     tellOthers(this.id);
+    await this.#reportFaults();
     return ok(event);
+  }
+
+  #failed(event: CampaignEvent, fault: StorageFault): void {
+    this.#unsaved = [...this.#unsaved, event];
+    const detail = 'detail' in fault ? fault.detail : '';
+    this.#faults = [...this.#faults, { what: fault.tag, detail: `${event.at} ${event.kind} ${detail}`.trim() }];
+  }
+
+  /** A failure of the system is part of the record: it is written down as soon as writing works again. */
+  async #reportFaults(): Promise<void> {
+    this.#unsaved = [];
+    const faults = this.#faults;
+    this.#faults = [];
+    for (const { what, detail } of faults)
+      await this.#write('device-fault', { what: what.slice(0, 80), detail: detail.slice(0, 2000) }, {}, 1);
+  }
+
+  /** Acts that could not be written, oldest first; empty again once a write has completed. */
+  get unsaved(): readonly CampaignEvent[] {
+    return this.#unsaved;
+  }
+
+  /**
+   * A file of everything this tab holds, unwritten acts too, made without the database: the way out when it writes no
+   * more.
+   */
+  rescueFile(): Promise<Result<ExportedFile, ExportFault>> {
+    return fileOf([...this.#events, ...this.#unsaved], this.id, this.#state.title);
   }
 
   #head(): Head {

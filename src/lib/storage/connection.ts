@@ -15,8 +15,8 @@ export interface ConnectionNews {
   onDataLoss?: (how: string) => void;
 }
 
-const patience = 8_000;
-const tries = 3;
+/** How long each try waits for the database to open. An open request can die without a word when the browser cuts it. */
+const patience = [2_000, 3_000, 5_000];
 
 /**
  * The way to the database: opens on first use, closes for a later version, reopens after a loss. A page that was asleep
@@ -39,27 +39,34 @@ export class Connection {
    * first try was written: `attempt` says which try it is, from 1.
    */
   async use<T>(operation: (db: Database, attempt: number) => Promise<T>): Promise<Result<T, StorageFault>> {
-    let last: unknown = null;
-    for (let attempt = 1; attempt <= tries; attempt++) {
-      const opened = await this.#open();
-      if (!opened.ok) return opened;
+    let fault: StorageFault = { tag: 'connection-lost', detail: '' };
+    for (const [before, wait] of patience.entries()) {
+      const opened = await this.#open(wait);
+      if (!opened.ok) {
+        fault = opened.error;
+        if (fault.tag === 'open-timeout' || fault.tag === 'connection-lost') continue;
+        return opened;
+      }
+      const { db, source } = opened.value;
       try {
-        return ok(await operation(opened.value, attempt));
+        return ok(await operation(db, before + 1));
       } catch (cause) {
-        last = cause;
-        if (!isLostConnection(cause)) return fail(faultOf(cause));
-        this.drop();
+        fault = faultOf(cause);
+        if (!isLostConnection(cause)) return fail(fault);
+        // Another operation may have replaced the dead connection already: its new one is not to be closed.
+        if (this.#db === source) this.drop();
       }
     }
-    return fail(faultOf(last));
+    return fail(fault);
   }
 
   /** Like `use`, for operations that write: refused on a database of a later program. */
   async write<T>(operation: (db: Database, attempt: number) => Promise<T>): Promise<Result<T, StorageFault>> {
-    const opened = await this.#open();
-    if (!opened.ok) return opened;
-    if (this.newer !== null) return fail({ tag: 'newer-schema', version: this.newer });
-    return this.use(operation);
+    const done = await this.use(async (db, attempt) =>
+      this.newer === null ? { did: await operation(db, attempt) } : null
+    );
+    if (!done.ok) return done;
+    return done.value ? ok(done.value.did) : fail({ tag: 'newer-schema', version: this.newer ?? 0 });
   }
 
   /** Forgets the connection; the next use opens a new one. */
@@ -72,22 +79,26 @@ export class Connection {
     );
   }
 
-  async #open(): Promise<Result<Database, StorageFault>> {
-    this.#db ??= this.#connect();
-    const mine = this.#db;
+  async #open(wait: number): Promise<Result<{ db: Database; source: Promise<Database> }, StorageFault>> {
+    if (!this.#db) {
+      const connecting: Promise<Database> = this.#connect(() => connecting);
+      this.#db = connecting;
+    }
+    const source = this.#db;
     let timer: ReturnType<typeof setTimeout> | undefined;
-    const late = new Promise<'late'>((resolve) => (timer = setTimeout(() => resolve('late'), patience)));
+    const late = new Promise<null>((resolve) => (timer = setTimeout(() => resolve(null), wait)));
     try {
-      const first = await Promise.race([mine, late]);
-      if (first !== 'late') return ok(first);
-      if (this.#db === mine) this.#db = null;
-      void mine.then(
-        (db) => db.close(),
+      // A migration takes the time it needs.
+      const db = (await Promise.race([source, late])) ?? (this.#migrating ? await source : null);
+      if (db) return ok({ db, source });
+      if (this.#db === source) this.#db = null;
+      void source.then(
+        (opened) => opened.close(),
         () => undefined
       );
-      return fail(this.#waiting ? { tag: 'blocked' } : { tag: 'open-timeout', seconds: patience / 1000 });
+      return fail(this.#waiting ? { tag: 'blocked' } : { tag: 'open-timeout', seconds: wait / 1000 });
     } catch (cause) {
-      if (this.#db === mine) this.#db = null;
+      if (this.#db === source) this.#db = null;
       return fail(faultOf(cause));
     } finally {
       clearTimeout(timer);
@@ -95,8 +106,9 @@ export class Connection {
   }
 
   #waiting = false;
+  #migrating = false;
 
-  async #connect(): Promise<Database> {
+  async #connect(mine: () => Promise<Database>): Promise<Database> {
     if (!('indexedDB' in globalThis)) throw new DOMException('no indexedDB here', 'SecurityError');
     const events = {
       blocked: () => {
@@ -108,7 +120,7 @@ export class Connection {
         this.#news.onSuperseded?.();
       },
       terminated: () => {
-        this.#db = null;
+        if (this.#db === mine()) this.#db = null;
         this.#news.onTerminated?.();
       }
     };
@@ -118,6 +130,8 @@ export class Connection {
         upgrade: async (database, from, _to, tx, event) => {
           const loss = (event as IDBVersionChangeEvent & { dataLoss?: string }).dataLoss;
           if (loss && loss !== 'none') this.#news.onDataLoss?.(loss);
+          this.#waiting = false;
+          this.#migrating = true;
           for (const step of migrations.slice(from)) await step(database, tx);
         }
       });
@@ -130,6 +144,7 @@ export class Connection {
       return db;
     } finally {
       this.#waiting = false;
+      this.#migrating = false;
     }
   }
 }

@@ -6,16 +6,16 @@ import type { CampaignSummary } from '#lib/core/campaign/summary.ts';
 import type { Result } from '#lib/core/result.ts';
 import type { Connection } from './connection.ts';
 import type { StorageFault } from './fault.ts';
-import type { StoredEvent } from './schema.ts';
+import type { Place, StoredEvent } from './schema.ts';
 
 type Any = CampaignEvent | UnknownEvent;
 
-export const placeOf = (event: Any): string => `${event.campaign}/${event.device}/${event.seq}`;
+const placeOf = (event: Any): Place => [event.campaign, event.device, event.seq, ''];
 
 const storedOf = ({ event, text, seal }: Pick<Sealed, 'text' | 'seal'> & { event: Any }): StoredEvent => ({
   id: event.id,
   campaign: event.campaign,
-  place: placeOf(event),
+  at: placeOf(event),
   text,
   seal
 });
@@ -116,8 +116,9 @@ export function takeIn(
         const { campaign, id, text, seal } = stored;
         await tx.objectStore('quarantine').put({ campaign, id, text, seal, from, at: note.event.at });
       } else if (!held) {
-        const taken = await events.index('place').getKey(stored.place);
-        await events.add(taken === undefined ? stored : { ...stored, place: `${stored.place}/${stored.id}` });
+        const taken = await events.index('at').getKey(stored.at);
+        const [campaign, device, seq] = stored.at;
+        await events.add(taken === undefined ? stored : { ...stored, at: [campaign, device, seq, stored.id] });
       }
     }
     if (!(await events.get(note.event.id))) await events.add(storedOf(note));

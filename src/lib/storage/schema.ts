@@ -5,10 +5,20 @@ import type { CampaignSummary } from '#lib/core/campaign/summary.ts';
 export interface StoredEvent {
   id: string;
   campaign: string;
-  /** `campaign/device/seq`, unique; an event that takes a number already taken (a fork) adds its id. */
-  place: string;
+  /** Campaign, device, sequence number, and '' (the id, for an event that takes a number already taken); unique. */
+  at: Place;
   text: string;
   seal: string;
+}
+
+export type Place = [campaign: string, device: string, seq: number, fork: string];
+
+/** A part of a campaign's checkpoint; it can always be made again from the events. */
+export interface StoredCheckpoint {
+  campaign: string;
+  /** 'core', or the id of a session. */
+  part: string;
+  text: string;
 }
 
 /** Something typed that is not an event yet. */
@@ -30,10 +40,11 @@ export interface StoredQuarantine {
 }
 
 export interface EvenloadSchema extends DBSchema {
-  events: { key: string; value: StoredEvent; indexes: { place: string; campaign: string } };
+  events: { key: string; value: StoredEvent; indexes: { at: Place; campaign: string } };
   campaigns: { key: string; value: CampaignSummary };
   drafts: { key: [string, string]; value: StoredDraft };
   quarantine: { key: [string, string, string]; value: StoredQuarantine };
+  checkpoints: { key: [string, string]; value: StoredCheckpoint };
   settings: { key: string; value: unknown };
 }
 
@@ -48,13 +59,30 @@ type Upgrade = IDBPTransaction<EvenloadSchema, StoreName[], 'versionchange'>;
 export const migrations: ((db: Database, tx: Upgrade) => void | Promise<void>)[] = [
   (db) => {
     const events = db.createObjectStore('events', { keyPath: 'id' });
-    events.createIndex('place', 'place', { unique: true });
+    createIndex(events, 'place', true);
     events.createIndex('campaign', 'campaign');
     db.createObjectStore('campaigns', { keyPath: 'id' });
     db.createObjectStore('drafts', { keyPath: ['campaign', 'name'] });
     db.createObjectStore('quarantine', { keyPath: ['campaign', 'id', 'seal'] });
     db.createObjectStore('settings');
+  },
+  // 2: places become keys that sort by number, so that the events after a checkpoint can be asked for.
+  async (db, tx) => {
+    db.createObjectStore('checkpoints', { keyPath: ['campaign', 'part'] });
+    const events = tx.objectStore('events');
+    for (let cursor = await events.openCursor(); cursor; cursor = await cursor.continue()) {
+      const { place, ...rest } = cursor.value as StoredEvent & { place: string };
+      const [campaign = '', device = '', seq = '0', fork = ''] = place.split('/');
+      await cursor.update({ ...rest, at: [campaign, device, Number(seq), fork] });
+    }
+    (events as unknown as IDBObjectStore).deleteIndex('place');
+    createIndex(events, 'at', true);
   }
 ];
+
+/** For indexes that only an older schema knows by its types. */
+function createIndex(store: unknown, name: string, unique: boolean): void {
+  (store as IDBObjectStore).createIndex(name, name, { unique });
+}
 
 export const databaseName = 'evenload';

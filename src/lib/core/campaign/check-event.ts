@@ -11,7 +11,7 @@ export const isKnown = (event: CampaignEvent | UnknownEvent): event is CampaignE
 /**
  * Reads an event from a parsed JSON value. An unknown kind is let through as it is; a known kind must fit its schema.
  * Errors: `bad-event` with the path to the field and the cause in a few words.
- * Checked by: test/core/campaign/check-event.test.ts.
+ * Checked by: test/core/campaign/make-event.test.ts.
  */
 export function checkEvent(value: unknown): Result<CampaignEvent | UnknownEvent, BadEvent> {
   const envelope = v.safeParse(EnvelopeSchema, value, { abortEarly: true });

@@ -12,7 +12,7 @@ const jump = 2_000;
 /**
  * One device's chain in a campaign: its head, what is not exported, and what is wrong with the chain. An event that
  * continues the chain costs the same however long the chain is; any other is put in its place and the chain read anew.
- * Checked by: test/core/campaign/device-log.test.ts.
+ * Checked by: test/core/campaign/replay.test.ts.
  */
 export class DeviceLog {
   readonly device: string;

@@ -10,7 +10,7 @@ const text = (a: string, b: string): number => (a < b ? -1 : a > b ? 1 : 0);
  * The same events in the one order that every device gives them: what a device knew comes before what it then recorded,
  * a device's own events by sequence number even when its clock jumped back, the rest by tick, then device, then id.
  * Depends on the set alone. Cost n log n in the number of events given.
- * Checked by: test/core/campaign/in-order.test.ts.
+ * Checked by: test/core/campaign/make-event.test.ts.
  */
 export function inOrder<T extends Any>(events: readonly T[]): T[] {
   if (events.length < 2) return [...events];

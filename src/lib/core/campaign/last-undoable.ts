@@ -6,7 +6,7 @@ import { isUndoable } from './marks.ts';
  * The last act of a device that can be taken back and has not been; null when there is none. Acts are undone one after
  * the other, newest first. A plan or a written file between them does not stand in the way.
  * @param events of a campaign in the order recorded on this device; read from the end
- * Checked by: test/core/campaign/last-undoable.test.ts.
+ * Checked by: test/core/campaign/make-event.test.ts.
  */
 export function lastUndoable(events: readonly (CampaignEvent | UnknownEvent)[], device: string): CampaignEvent | null {
   const undone = new Set<string>();

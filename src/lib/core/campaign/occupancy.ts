@@ -32,13 +32,14 @@ const empty = (slot: number, specimens: string[]): Occupancy => ({
  * @param events of one session, in order
  * @param planned code planned for each slot; null where none is
  * @param counts does the event stand (is it not undone)?
- * @param standing does the ruin stand (neither undone nor reinstated)?
+ * @param standingAt did the ruin stand (neither undone nor reinstated) when the specimen was loaded? A run that is
+ *   reinstated after its spare was tested stays a run of its own.
  */
 export function occupanciesOf(
   events: readonly CampaignEvent[],
   planned: readonly (string | null)[],
   counts: (event: CampaignEvent) => boolean,
-  standing: (ruin: Of<'ruined'>) => boolean
+  standingAt: (ruin: Of<'ruined'>, load: Of<'specimen-loaded'>) => boolean
 ): Map<number, Occupancy[]> {
   const slots = new Map<number, Occupancy[]>();
   const all = (slot: number): Occupancy[] => {
@@ -63,8 +64,14 @@ export function occupanciesOf(
       case 'specimen-loaded':
         if (counts(event)) load(event);
         break;
+      case 'reading-corrected': {
+        // A correction belongs where the reading is that it corrects, whatever code it bears.
+        const { target, slot } = event.data;
+        const holder = all(slot).find(({ readings }) => readings.some(({ id }) => id === target));
+        (holder ?? about(slot, event.data.specimen)).readings.push(event);
+        break;
+      }
       case 'reading-recorded':
-      case 'reading-corrected':
         about(event.data.slot, event.data.specimen).readings.push(event);
         break;
       case 'reading-missing':
@@ -84,14 +91,15 @@ export function occupanciesOf(
   function load(event: Of<'specimen-loaded'>): void {
     const { slot, specimen } = event.data;
     let here = now(slot);
-    if (here.ruins.some(standing) && !here.specimens.has(specimen)) {
+    const ruined = (one: Occupancy): boolean => one.ruins.some((ruin) => standingAt(ruin, event));
+    if (ruined(here) && !here.specimens.has(specimen)) {
       here = empty(slot, [specimen]);
       all(slot).push(here);
     }
     for (const list of slots.values())
       for (const other of list)
         if (other !== here && other.slot !== slot && other.loads.get(event.device)?.data.specimen === specimen)
-          if (!other.ruins.some(standing)) other.loads.delete(event.device);
+          if (!ruined(other)) other.loads.delete(event.device);
     here.specimens.add(specimen);
     here.loads.set(event.device, event);
   }

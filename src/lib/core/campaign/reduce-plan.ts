@@ -28,7 +28,7 @@ export function reducePlan(
   const pick = <T extends CampaignEvent>(key: string, session: string | null, list: readonly T[]): T | undefined => {
     const same = (a: T, b: T): boolean => canonicalJson(contentOf(a)) === canonicalJson(contentOf(b));
     const place = { key, kind: 'two-plans', session, slot: null, reading: null } as const;
-    const { winner, contradiction } = resolve(place, list, same, decisionsOn(key), before);
+    const { winner, contradiction } = resolve(place, list, same, decisionsOn, before);
     if (contradiction) contradictions.push(contradiction);
     return winner ?? list[0];
   };

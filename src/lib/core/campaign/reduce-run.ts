@@ -1,17 +1,14 @@
-import type { CampaignEvent, DataOf } from './event.ts';
 import { markOf, type Of } from './marks.ts';
 import type { Occupancy } from './occupancy.ts';
 import type { ReadingDefinition } from './plan.ts';
-import { reduceReading } from './reduce-reading.ts';
-import { type Decision, resolve } from './resolve.ts';
+import { reduceReading, type ReadingEvent, type ReadingSurroundings } from './reduce-reading.ts';
+import { resolve } from './resolve.ts';
 import type { Contradiction, NoteState, ReadingState, Ruin, RunState } from './state.ts';
 
+type Missing = Of<'reading-missing'>;
+
 /** What the rest of the record tells a session's reduction. */
-export interface Surroundings {
-  undone: (id: string) => boolean;
-  /** Standing decisions about a contradiction, in order. */
-  decisionsOn: (key: string) => readonly Decision[];
-  before: (a: CampaignEvent, b: CampaignEvent) => boolean;
+export interface Surroundings extends ReadingSurroundings {
   /** The reinstatement that stands for a ruin. */
   reinstatement: (ruin: string) => Of<'reinstated'> | undefined;
   /** Loads that a decision on a specimen used twice has set aside. */
@@ -41,13 +38,13 @@ export function reduceRuins(
   events: readonly Of<'ruined'>[],
   around: Surroundings
 ): { ruined: Ruin | null; history: RunState['ruinHistory']; contradiction: Contradiction | null } {
-  const valid = events.filter((event) => !around.undone(event.id));
+  const valid = events.filter((event) => !around.undone(event));
   const standing = valid.filter((event) => !around.reinstatement(event.id));
   const { winner, contradiction } = resolve(
     { key: place.key, kind: 'two-ruins', session: place.session, slot: place.slot, reading: null },
     standing,
     sameRuin,
-    around.decisionsOn(place.key),
+    around.decisionsOn,
     around.before
   );
   const counts = winner ?? standing[0];
@@ -81,7 +78,7 @@ export function reduceRun(
     { key, kind: 'two-specimens', session, slot, reading: null },
     claims.filter((event) => !around.aside.has(event.id)),
     (a, b) => a.data.specimen === b.data.specimen,
-    around.decisionsOn(key),
+    around.decisionsOn,
     around.before
   );
   keep(load.contradiction);
@@ -124,23 +121,22 @@ function readingsOf(
   around: Surroundings,
   keep: (contradiction: Contradiction | null) => void
 ): ReadingState[] {
-  const nameOf = (data: Pick<DataOf<'reading-missing'>, 'reading' | 'repeat'>): string =>
-    `${data.reading}/${data.repeat}`;
-  const places = new Map<string, { reading: string; repeat: number }>();
-  for (const { id: reading, repeats } of around.definitions)
-    for (let repeat = 1; repeat <= repeats; repeat++) places.set(nameOf({ reading, repeat }), { reading, repeat });
-  for (const { data } of [...occupancy.readings, ...occupancy.missing])
-    if (!places.has(nameOf(data))) places.set(nameOf(data), { reading: data.reading, repeat: data.repeat });
-  return [...places].map(([name, { reading, repeat }]) => {
-    const { state, contradiction } = reduceReading(
-      { session, slot: occupancy.slot, specimen: planned, reading, repeat },
-      occupancy.readings.filter(({ data }) => nameOf(data) === name),
-      occupancy.missing.filter(({ data }) => nameOf(data) === name),
-      around.undone,
-      around.decisionsOn,
-      around.before
-    );
+  const groups = new Map<string, { reading: string; repeat: number; events: ReadingEvent[]; missing: Missing[] }>();
+  const group = (reading: string, repeat: number): { events: ReadingEvent[]; missing: Missing[] } => {
+    const name = `${reading}/${repeat}`;
+    let found = groups.get(name);
+    if (!found) groups.set(name, (found = { reading, repeat, events: [], missing: [] }));
+    return found;
+  };
+  for (const { id, repeats } of around.definitions) for (let n = 1; n <= repeats; n++) group(id, n);
+  for (const event of occupancy.readings) group(event.data.reading, event.data.repeat).events.push(event);
+  for (const event of occupancy.missing) group(event.data.reading, event.data.repeat).missing.push(event);
+  const readings: ReadingState[] = [];
+  for (const { reading, repeat, events, missing } of groups.values()) {
+    const place = { session, slot: occupancy.slot, specimen: planned, reading, repeat };
+    const { state, contradiction } = reduceReading(place, events, missing, around);
     keep(contradiction);
-    return state;
-  });
+    readings.push(state);
+  }
+  return readings;
 }

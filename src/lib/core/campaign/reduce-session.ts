@@ -27,12 +27,15 @@ export function reduceSession(
   events: readonly CampaignEvent[],
   around: Surroundings
 ): ReducedSession {
-  const counts = (event: CampaignEvent): boolean => !around.undone(event.id);
+  const counts = (event: CampaignEvent): boolean => !around.undone(event);
   const valid = events.filter(counts);
   const of = <K extends CampaignEvent['kind']>(kind: K): Of<K>[] =>
     valid.filter((event): event is Of<K> => event.kind === kind);
   const codes = plan.slots.map((slot) => slot?.specimen ?? null);
-  const slots = occupanciesOf(events, codes, counts, (ruin) => counts(ruin) && !around.reinstatement(ruin.id));
+  const slots = occupanciesOf(events, codes, counts, (ruin, load) => {
+    const back = around.reinstatement(ruin.id);
+    return counts(ruin) && !(back && around.before(back, load));
+  });
   const contradictions: Contradiction[] = [];
   const claims: Of<'specimen-loaded'>[] = [];
   const whole = reduceRuins(

@@ -116,18 +116,15 @@ export class Replay {
     else this.#dirty.add(place.split('/')[0] ?? '');
   }
 
-  #undone = (id: string): boolean => {
-    const target = this.#ids.get(id);
-    return this.#undoing.has(id) && target !== undefined && isUndoable(target);
-  };
+  #undone = (event: CampaignEvent): boolean => this.#undoing.has(event.id) && isUndoable(event);
 
   #decisionsOn = (key: string): readonly Decision[] =>
-    inOrder((this.#decisions.get(key) ?? []).filter((event) => !this.#undone(event.id)));
+    inOrder((this.#decisions.get(key) ?? []).filter((event) => !this.#undone(event)));
 
   #before = (a: CampaignEvent, b: CampaignEvent): boolean => inOrder([a, b])[0] === a;
 
   #reinstatement = (ruin: string): Of<'reinstated'> | undefined =>
-    inOrder((this.#reinstating.get(ruin) ?? []).filter((event) => !this.#undone(event.id)))[0];
+    inOrder((this.#reinstating.get(ruin) ?? []).filter((event) => !this.#undone(event)))[0];
 
   /** Highest tick of any event taken in. */
   get tick(): number {
@@ -198,7 +195,7 @@ export class Replay {
       { key, kind: 'specimen-twice', session: null, slot: null, reading: null },
       loads,
       samePlace,
-      this.#decisionsOn(key),
+      this.#decisionsOn,
       this.#before
     );
     if (contradiction) this.#twice.set(code, contradiction);
@@ -216,7 +213,7 @@ export class Replay {
     const { issued, issuedBy, amendments } = this.#plan;
     const overall = inOrder(this.#overall);
     const created = overall.find((event) => event.kind === 'campaign-created');
-    const standing = overall.filter((event) => !this.#undone(event.id));
+    const standing = overall.filter((event) => !this.#undone(event));
     const reduced = issued?.sessions.flatMap(({ id }) => this.#reduced.get(id) ?? []) ?? [];
     const sessions: SessionState[] = reduced.map(({ state }) => state);
     const devices = [...this.#devices.values()].sort((a, b) => (a.device < b.device ? -1 : 1));

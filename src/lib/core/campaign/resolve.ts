@@ -15,16 +15,18 @@ export interface Resolved<T extends CampaignEvent> {
  * all of them; else none. A statement that was not weighed opens the question again.
  * @param candidates statements that stand, in order
  * @param agree do two of them say the same?
- * @param decisions decisions about this key that stand, in order
+ * @param decisionsOn decisions about a key that stand, in order
  * @param before was an event known when a decision that does not list its events was taken? (its order)
  */
 export function resolve<T extends CampaignEvent>(
   place: Pick<Contradiction, 'key' | 'kind' | 'session' | 'slot' | 'reading'>,
   candidates: readonly T[],
   agree: (a: T, b: T) => boolean,
-  decisions: readonly Decision[],
+  decisionsOn: (key: string) => readonly Decision[],
   before: (event: T, decision: Decision) => boolean
 ): Resolved<T> {
+  if (candidates.length < 2) return { winner: candidates[0] ?? null, contradiction: null };
+  const decisions = decisionsOn(place.key);
   const lost = new Set<string>();
   for (const decision of decisions) {
     const { chosen, among } = decision.data;

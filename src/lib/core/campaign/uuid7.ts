@@ -2,7 +2,7 @@
  * A UUID of version 7: 48 bits of Unix time in milliseconds, then random bits.
  * @param now milliseconds since 1970, 0 ≤ now < 2^48
  * @param random ten random bytes
- * Source: RFC 9562, 5.7. Checked by: test/core/campaign/uuid7.test.ts (appendix A.6 of the RFC).
+ * Source: RFC 9562, 5.7. Checked by: test/core/campaign/seal.test.ts (appendix A.6 of the RFC).
  */
 export function uuid7(now: number, random: Uint8Array): string {
   if (random.length !== 10) throw new Error(`uuid7: needs 10 random bytes, got ${random.length}`);
