@@ -11,7 +11,7 @@ export interface AnovaLine {
 
 /** A source of variation in both orders: alone (unadjusted) and after all others (adjusted). */
 export interface AnovaSource {
-  source: 'treatment' | 'session' | 'slot' | 'machine' | 'shift' | 'covariate';
+  source: 'treatment' | 'session' | 'slot' | 'machine' | 'shift' | 'covariate' | 'order';
   adjusted: AnovaLine;
   unadjusted: AnovaLine;
 }

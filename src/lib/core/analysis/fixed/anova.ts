@@ -131,5 +131,5 @@ function termAlone(table: RunTable, term: Term, aboutMean: Float64Array): SumOfS
     levels++;
     ss += (totals[c]! * totals[c]!) / weights[c]!;
   }
-  return { df: term.name === 'covariate' ? 1 : levels - 1, ss };
+  return { df: term.scaling === null ? levels - 1 : 1, ss };
 }

@@ -102,10 +102,10 @@ function sessionEffects(table: RunTable, solution: IntraSolution, parts: Parts):
 function covariateLine(model: IntraModel, solution: IntraSolution, sigma: number | null): FixedFit['covariate'] {
   const { table, inverse, factor, errorDf } = model;
   const term = termOf(table, 'covariate');
-  if (term === undefined || table.covariate === null || factor.kept[term.start] === 0) return null;
+  if (term === undefined || term.scaling === null || factor.kept[term.start] === 0) return null;
   const c = term.start;
-  const slope = solution.beta[c]! / table.covariate.scale;
+  const slope = solution.beta[c]! / term.scaling.scale;
   if (sigma === null) return { slope, se: null, t: null, df: errorDf, p: null };
-  const se = (sigma * Math.sqrt(inverse[c * table.p + c]!)) / table.covariate.scale;
+  const se = (sigma * Math.sqrt(inverse[c * table.p + c]!)) / term.scaling.scale;
   return { slope, se, t: slope / se, df: errorDf, p: tTwoSided(slope / se, errorDf) };
 }

@@ -4,7 +4,7 @@ import type { RunTable } from './run-table.ts';
 export function equalWeights(table: RunTable): Float64Array {
   const g = new Float64Array(table.p);
   for (const term of table.terms.slice(1)) {
-    if (term.name === 'covariate') continue;
+    if (term.scaling !== null) continue;
     for (let c = term.start; c < term.start + term.size; c++) g[c] = 1 / term.size;
   }
   return g;

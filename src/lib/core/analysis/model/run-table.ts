@@ -1,7 +1,7 @@
 /** Name of a fixed effect of the model. */
-export type TermName = 'treatment' | 'slot' | 'machine' | 'shift' | 'covariate';
+export type TermName = 'treatment' | 'slot' | 'machine' | 'shift' | 'covariate' | 'order';
 
-/** A fixed effect: columns start … start + size − 1 of the model matrix, one a level (the covariate has one). */
+/** A fixed effect: columns start … start + size − 1 of the model matrix, one a level (a quantity has one). */
 export interface Term {
   name: TermName;
   start: number;
@@ -9,6 +9,8 @@ export interface Term {
   levels: string[];
   /** Constant inside every session, so that it goes with the sessions when these are fixed. */
   between: boolean;
+  /** A quantity stands in its column as (x − centre) / scale; null for a factor. */
+  scaling: { centre: number; scale: number } | null;
 }
 
 /**
@@ -36,8 +38,6 @@ export interface RunTable {
   /** Readings less `centre`. */
   y: Float64Array;
   centre: number;
-  /** Centre and scale of the covariate, value = (x − centre) / scale; null without one. */
-  covariate: { centre: number; scale: number } | null;
   /** Largest absolute reading as typed: rounding noise is measured against it. */
   magnitude: number;
 }

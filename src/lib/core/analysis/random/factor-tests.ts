@@ -26,7 +26,7 @@ export function termContrasts(info: VarianceInformation, term: Term): ContrastRo
   const { problem } = info;
   const { table, q, columns, nulls, moments } = problem;
   const levels = [...Array(term.size).keys()].map((i) => term.start + i).filter((c) => moments.diagonal[c]! > 0);
-  if (term.name === 'covariate') return restrict([[[levels[0]!, 1]]]);
+  if (term.scaling !== null) return restrict(columns.includes(term.start) ? [[[term.start, 1]]] : []);
   const differences: { level: number; from: number }[] = [];
   const heads: number[] = [];
   for (const c of levels) {

@@ -3,7 +3,7 @@ import { tTwoSided } from '../../numerics/distributions/student-t.ts';
 import type { FactorTest, RandomFit, VarianceComponents } from '../fit-result.ts';
 import type { Moments } from '../model/moments.ts';
 import type { Parts } from '../model/parts.ts';
-import { termOf, type RunTable, type Term } from '../model/run-table.ts';
+import { termOf, type RunTable, type Term, type TermName } from '../model/run-table.ts';
 import { hasScatter } from '../fixed/fit-fixed.ts';
 import { fail, ok } from '../../result.ts';
 import type { Section } from '../reason.ts';
@@ -66,7 +66,7 @@ export function fitRandom(model: RandomModel, alpha: number): Section<RandomFit>
   const { problem, maximum, info, beta } = model;
   const { table, n, q } = problem;
   const { point, boundary } = maximum;
-  const { gamma, sigma2, inverse } = point;
+  const { gamma, inverse } = point;
   const W = info.expected;
   if (W === null) return fail({ tag: 'no-shared-session' });
   const whole = wholePart(problem);
@@ -89,7 +89,7 @@ export function fitRandom(model: RandomModel, alpha: number): Section<RandomFit>
     },
     sessions: predictedSessions(info),
     factors: terms.slice(1).map((term) => term.name),
-    covariate: covariateLine(model, adjusted, sigma2)
+    covariate: quantityLine(model, 'covariate', adjusted)
   });
 }
 
@@ -134,16 +134,17 @@ function predictedSessions({ problem, point, sessionSums }: VarianceInformation)
   });
 }
 
-function covariateLine(model: RandomModel, adjusted: Float64Array, sigma2: number): RandomFit['covariate'] {
+/** Slope of a quantity with Kenward & Roger's error; null where the model does not hold it. */
+export function quantityLine(model: RandomModel, name: TermName, adjusted: Float64Array): RandomFit['covariate'] {
   const { problem, info, beta } = model;
   const { table, q, columns } = problem;
-  const term = termOf(table, 'covariate');
+  const term = termOf(table, name);
   const at = term === undefined ? -1 : columns.indexOf(term.start);
-  if (at < 0 || table.covariate === null || info.expected === null) return null;
+  if (at < 0 || !term?.scaling || info.expected === null) return null;
   const d = at * q + at;
   const df = singleDf(info.expected, info.point.gamma, info.point.inverse[d]!, info.G[d]!);
-  const slope = beta[at]! / table.covariate.scale;
-  const se = Math.sqrt(sigma2 * adjusted[d]!) / table.covariate.scale;
+  const slope = beta[at]! / term.scaling.scale;
+  const se = Math.sqrt(info.point.sigma2 * adjusted[d]!) / term.scaling.scale;
   return { slope, se, df, t: slope / se, p: tTwoSided(slope / se, df) };
 }
 

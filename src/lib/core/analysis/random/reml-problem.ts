@@ -42,7 +42,7 @@ export interface RemlProblem {
   /** Error degrees of freedom inside sessions. */
   errorDf: number;
   sizes: SizePart[];
-  /** Added to log|XᵀV⁻¹X| to undo the scale of the covariate. */
+  /** Added to log|XᵀV⁻¹X| to undo the scale of quantities. */
   logScale: number;
 }
 
@@ -87,7 +87,7 @@ export function remlProblem(table: RunTable, moments: Moments): RemlProblem {
     errorSs: solution.errorSs,
     errorDf: intra.errorDf,
     sizes,
-    logScale: table.covariate === null ? 0 : 2 * Math.log(table.covariate.scale)
+    logScale: table.terms.reduce((s, { scaling }) => s + (scaling === null ? 0 : 2 * Math.log(scaling.scale)), 0)
   };
 }
 
