@@ -1,7 +1,8 @@
 import { fail, ok, type Result } from '../result.ts';
-import type { Analysis, Answer, Comparisons, FixedFit, RandomFit } from './analysis-result.ts';
+import type { Analysis, Answer, Comparisons, FixedFit, RandomFit, RankAnalysis } from './analysis-result.ts';
 import { collectWarnings } from './answer/collect-warnings.ts';
 import { findAnswer } from './answer/find-answer.ts';
+import { rankAnswer } from './answer/rank-answer.ts';
 import { verdictsOfFit, verdictsOfLimits, type Verdicts } from './answer/verdicts.ts';
 import { fitCensored } from './censored/fit-censored.ts';
 import { checkObservations, type SortedRows } from './check-observations.ts';
@@ -17,6 +18,9 @@ import { withoutBetween, type RunTable } from './model/run-table.ts';
 import type { Observations } from './observations.ts';
 import { fitRandom, solveRandom, type RandomModel } from './random/fit-random.ts';
 import { randomContrast } from './random/random-contrast.ts';
+import { durbinTest } from './ranks/durbin-test.ts';
+import { friedmanTest } from './ranks/friedman-test.ts';
+import { skillingsMackTest } from './ranks/skillings-mack-test.ts';
 import type { InputFault, Reason, Section } from './reason.ts';
 import { analyseRuined } from './ruined/analyse-ruined.ts';
 
@@ -76,6 +80,8 @@ export function analyse(
   const ruined = analyseRuined(observations, sorted, fixed.ok ? fixed.value : null);
   onStage('limits');
   const censored = impossible === null ? fitCensored(observations, sorted.kept) : fail(impossible);
+  onStage('ranks');
+  const ranks = impossible === null ? ok(rankTests(observations, sorted.kept)) : fail(impossible);
   onStage('answer');
   const limited = sorted.kept.filter((r) => rows[r]!.limit !== 'none').length;
   const partial = {
@@ -90,7 +96,7 @@ export function analyse(
     diagnostics,
     ruined,
     censored,
-    ranks: fail({ tag: 'not-asked' } as const)
+    ranks
   };
   const answer = answerOf(partial, observations);
   return ok({ ...partial, answer, warnings: collectWarnings({ ...partial, answer }, observations, leftOut) });
@@ -112,6 +118,16 @@ function whyNoFit(table: RunTable, parts: Parts, replication: readonly number[])
   return null;
 }
 
+function rankTests({ rows, treatments }: Observations, kept: readonly number[]): RankAnalysis {
+  const ranked = kept.map((r) => ({ treatment: rows[r]!.treatment, session: rows[r]!.session, y: rows[r]!.y! }));
+  const t = treatments.length;
+  return {
+    durbin: durbinTest(ranked, t),
+    skillingsMack: skillingsMackTest(ranked, t),
+    friedman: friedmanTest(ranked, t)
+  };
+}
+
 function fixedComparisons(
   observations: Observations,
   fixed: Section<FixedFit>,
@@ -125,7 +141,8 @@ function fixedComparisons(
       errorDf < 1 ? { tag: 'no-error-degrees-of-freedom', runs: n, parameters: rank } : { tag: 'no-scatter' }
     );
   }
-  return ok(compareTreatments(observations, means, pairs, fixedContrast(model, parts)));
+  const secondary = observations.primary !== 'fixed';
+  return ok(compareTreatments(observations, means, pairs, fixedContrast(model, parts), secondary));
 }
 
 function randomComparisons(
@@ -136,15 +153,17 @@ function randomComparisons(
   if (!random.ok) return random;
   if (!model.ok) return model;
   const { means, pairs } = random.value.kenwardRoger;
-  return ok(compareTreatments(observations, means, pairs, randomContrast(model.value)));
+  const secondary = observations.primary !== 'random';
+  return ok(compareTreatments(observations, means, pairs, randomContrast(model.value), secondary));
 }
 
 type Partial = Omit<Analysis, 'answer' | 'warnings'>;
 
 /** The answer of the primary model; of the other where that one could not be fitted; with limits, of the model for limits. */
 function answerOf(analysis: Partial, observations: Observations): Answer {
-  const { fixed, random, censored, comparisons, primary, alpha, counts } = analysis;
+  const { fixed, random, censored, comparisons, ranks, primary, alpha, counts } = analysis;
   const { direction } = observations;
+  if (observations.kind === 'rank' && ranks.ok) return rankAnswer(ranks.value, direction, alpha);
   if (counts.limited > 0 && censored.ok) {
     return findAnswer(verdictsOfLimits(censored.value, alpha), direction, alpha, null);
   }

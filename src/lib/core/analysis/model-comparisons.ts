@@ -19,12 +19,14 @@ export type ContrastFit = (weights: readonly number[]) => Section<{ estimate: nu
  * typed questions.
  *
  * @param means,pairs lines of a fit with error degrees of freedom
+ * @param quick the quick expansion for Dunnett's distribution, for the model that is not the primary one
  */
 export function compareTreatments(
   observations: Observations,
   means: readonly MeanLine[],
   pairs: readonly PairLine[],
-  contrast: ContrastFit
+  contrast: ContrastFit,
+  quick: boolean
 ): Comparisons {
   const { control, alpha, equivalenceMargin, direction, seed } = observations;
   const source = differenceSource(observations.treatments.length, means, pairs);
@@ -44,7 +46,7 @@ export function compareTreatments(
   const parts = new Set(means.flatMap(({ part }) => (part === null ? [] : [part]))).size;
   return {
     letters: parts > 1 ? fail({ tag: 'disconnected', parts }) : compactLetters(ordered, differs),
-    control: control === null ? fail({ tag: 'no-control' }) : compareToControl(source, control, alpha, seed),
+    control: control === null ? fail({ tag: 'no-control' }) : compareToControl(source, control, alpha, seed, quick),
     best: compareToBest(source, direction, alpha, meanSource),
     equivalence:
       control === null

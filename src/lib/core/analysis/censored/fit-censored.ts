@@ -30,7 +30,8 @@ export function fitCensored(observations: Observations, kept: readonly number[])
   const limited = kept.filter((r) => observations.rows[r]!.limit !== 'none').length;
   if (limited === 0) return fail({ tag: 'no-limits' });
   const { rows, unbounded } = settledRows(observations, kept);
-  if (rows.length === 0) return fail({ tag: 'no-maximum', treatments: unbounded });
+  const left = new Set(rows.map((r) => observations.rows[r]!.treatment));
+  if (left.size < 2) return fail({ tag: 'no-maximum', treatments: unbounded });
   const table = withoutBetween(buildRunTable(observations, rows).table);
   const intra = prepareIntra(table, momentsOf(table));
   const treatments = table.terms[0]!.size;
@@ -60,6 +61,7 @@ export function fitCensored(observations: Observations, kept: readonly number[])
   const restricted = free.filter((c) => c >= treatments);
   const without = fitColumns(observations, intra, restricted);
   const df = free.length - restricted.length;
+  if (df < 1) return fail({ tag: 'no-shared-session' });
   const statistic = without.ok ? Math.max(0, 2 * (maximum.logLik - without.value.logLik)) : 0;
   return ok({
     n: rows.length,

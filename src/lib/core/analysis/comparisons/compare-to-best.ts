@@ -48,7 +48,7 @@ export function compareToBest(
 function constrained(source: DifferenceSource, sign: 1 | -1, alpha: number): BestComparison {
   const { present } = source;
   const gap = (i: number, j: number) => sign * source.estimate(i, j);
-  const allowances = new Map(present.map((i) => [i, allowance(source, i, alpha)]));
+  const allowances = allowancesOf(source, alpha);
   const most = new Map<number, number>();
   for (const i of present) {
     const reach = others(present, i).map((j) => gap(i, j) + allowances.get(i)!(j).half);
@@ -76,11 +76,43 @@ function constrained(source: DifferenceSource, sign: 1 | -1, alpha: number): Bes
   return { lines, critical };
 }
 
-/** d_i·se_ij for every j, with treatment i in the control's place. */
-function allowance(source: DifferenceSource, i: number, alpha: number) {
-  const rest = others(source.present, i);
-  const largest = largestT(differenceCorrelation(source, i, rest), rest.length, 'one', 'expand');
+/** With more treatments than this one distribution serves all, see `allowancesOf`. */
+const MOST_APART = 16;
+
+/** The allowance of j when i stands in the control's place. */
+type Allowance = (j: number) => { multiple: number; half: number };
+
+/**
+ * The allowances d_i·se_ij. With many treatments all d_i are taken from the smallest of all correlations, in equal
+ * correlation: by Slepian's inequality the largest t is then stochastically larger, so that the intervals are a little too
+ * wide and never too narrow, and one distribution serves all.
+ *
+ * Source: D. Slepian (1962), Bell System Technical Journal 41, 463–501.
+ */
+function allowancesOf(source: DifferenceSource, alpha: number): Map<number, Allowance> {
+  const { present } = source;
+  const correlations = present.map((i) => differenceCorrelation(source, i, others(present, i)));
+  if (present.length <= MOST_APART) {
+    return new Map(
+      present.map((i, at) => {
+        const largest = largestT(correlations[at]!, present.length - 1, 'one', 'expand');
+        return [i, allowance(source, i, criticalByDf(largest, alpha))];
+      })
+    );
+  }
+  const least = correlations.reduce((low, matrix) => matrix.reduce((l, rho) => Math.min(l, rho), low), 1);
+  const m = present.length - 1;
+  const equal = Float64Array.from({ length: m * m }, (_, at) => (at % (m + 1) === 0 ? 1 : Math.max(0, least)));
+  const largest = largestT(equal, m, 'one');
+  const dfs = present.flatMap((i) => others(present, i).map((j) => source.df(i, j)));
+  // The fewest degrees of freedom for all keep the side of caution.
   const critical = criticalByDf(largest, alpha);
+  const fewest = dfs.reduce((low, df) => Math.min(low, df), Infinity);
+  return new Map(present.map((i) => [i, allowance(source, i, () => critical(fewest))]));
+}
+
+/** d_i·se_ij for every j, with treatment i in the control's place. */
+function allowance(source: DifferenceSource, i: number, critical: (df: number) => number): Allowance {
   return (j: number) => {
     const multiple = critical(source.df(i, j));
     return { multiple, half: multiple * source.se(i, j) };

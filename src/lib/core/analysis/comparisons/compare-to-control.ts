@@ -17,6 +17,7 @@ const MOST_SIMULATED = 24;
  * @param control position of the control
  * @param alpha error probability of the family
  * @param seed of the quasi-Monte Carlo integration, where one is needed
+ * @param quick takes the expansion instead of the quasi-Monte Carlo integration
  * @returns the lines in order of the treatments; `critical` belongs to the line with the fewest degrees of freedom
  *
  * Source: C. W. Dunnett (1955), A multiple comparison procedure for comparing several treatments with a control, JASA
@@ -27,7 +28,8 @@ export function compareToControl(
   source: DifferenceSource,
   control: number,
   alpha: number,
-  seed: string | number
+  seed: string | number,
+  quick = false
 ): Section<ControlComparison> {
   if (!source.present.includes(control)) return fail({ tag: 'control-without-readings' });
   const others = source.present.filter((i) => i !== control && source.estimable(i, control));
@@ -37,7 +39,7 @@ export function compareToControl(
   if (others.length === 0) return fail({ tag: 'no-shared-session' });
   if (others.some((i) => !(source.se(i, control) > 0))) return fail({ tag: 'no-scatter' });
   const m = others.length;
-  const effort = m > MOST_SIMULATED ? ('expand' as const) : { ...USUAL_EFFORT, seed };
+  const effort = quick || m > MOST_SIMULATED ? ('expand' as const) : { ...USUAL_EFFORT, seed };
   const largest = largestT(differenceCorrelation(source, control, others), m, 'two', effort);
   const critical = criticalByDf(largest, alpha);
   const lines = others.map((treatment): ControlLine => {

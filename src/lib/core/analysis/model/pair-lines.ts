@@ -42,8 +42,12 @@ export function pairLines(source: PairSource): PairLine[] {
       if (!estimable) continue;
       line.estimate = source.estimate(a, b);
       if (source.se === null) continue;
-      line.se = source.se(a, b);
-      line.df = source.df(a, b);
+      const se = source.se(a, b);
+      const df = source.df(a, b);
+      // Small-sample formulas can fail on a handful of runs; a pair without a usable error has none.
+      if (!(se >= 0 && se < Infinity && df > 0 && df < Infinity)) continue;
+      line.se = se;
+      line.df = df;
       from = Math.min(from, line.df);
       to = Math.max(to, line.df);
     }

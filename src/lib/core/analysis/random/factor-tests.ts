@@ -134,7 +134,13 @@ export function kenwardRogerTest(
   const { denDf, scale } = kenwardRogerF(r, W, gamma, trace1, trace11);
   const z = forwardSemidefinite(factorSemidefinite(project(L, adjusted, q), r), times(L, beta));
   const F = (scale * z.reduce((s, v) => s + v * v, 0)) / (sigma2 * r);
-  return { source: term.name, numDf: r, denDf, F, p: fUpper(F, r, denDf) };
+  return usableTest({ source: term.name, numDf: r, denDf, F, p: fUpper(F, r, denDf) });
+}
+
+/** Small-sample formulas can fail on a handful of runs; such a test is left out. */
+function usableTest(test: FactorTest): FactorTest | null {
+  const { denDf, F, p } = test;
+  return denDf > 0 && denDf < Infinity && F >= 0 && F < Infinity && p >= 0 ? test : null;
 }
 
 /** U⁻¹·A·U⁻ᵀ for a lower triangle U. */
@@ -199,7 +205,7 @@ export function satterthwaiteTest(
     nu.push(fixedDf ?? (W === null ? NaN : singleDf(W, gamma, values[m]!, vG)));
   }
   const denDf = combine(nu);
-  return { source: term.name, numDf: r, denDf, F, p: fUpper(F, r, denDf) };
+  return usableTest({ source: term.name, numDf: r, denDf, F, p: fUpper(F, r, denDf) });
 }
 
 function combine(nu: readonly number[]): number {

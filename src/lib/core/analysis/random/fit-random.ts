@@ -26,7 +26,7 @@ export interface RandomModel {
  * Solves the model with sessions random by restricted maximum likelihood.
  *
  * @returns the model, or why there is none: no error degrees of freedom inside sessions (the two variances cannot be told
- * apart), no scatter, or no maximum found
+ * apart), none between them, no scatter, or no maximum found
  */
 export function solveRandom(table: RunTable, moments: Moments): Section<RandomModel> {
   const problem = remlProblem(table, moments);
@@ -35,6 +35,10 @@ export function solveRandom(table: RunTable, moments: Moments): Section<RandomMo
     return fail({ tag: 'no-error-degrees-of-freedom', runs: table.n, parameters: table.n - problem.errorDf });
   }
   if (!hasScatter(table, problem.errorSs)) return fail({ tag: 'no-scatter' });
+  // Degrees of freedom of the sessions after the treatments: without any, their variance leaves no trace.
+  if (table.n - problem.q - problem.errorDf < 1) {
+    return fail({ tag: 'confounded', factor: 'session', with: 'treatment' });
+  }
   const maximum = maximiseReml(problem);
   if (!maximum.converged) return fail({ tag: 'did-not-converge', iterations: maximum.evaluations });
   const info = varianceInformation(problem, maximum.point);

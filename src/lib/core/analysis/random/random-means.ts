@@ -57,14 +57,11 @@ export function randomMeans(
     const l = weights.slice();
     l[treatment]! += 1;
     if (!estimable(nulls, l)) return { ...none, scope: 'all', part: 0 };
-    return {
-      ...none,
-      estimate: common + beta[at]!,
-      se: Math.sqrt(sigma2 * of(0, at)),
-      df: method.df(of(1, at), of(2, at)),
-      scope: 'all',
-      part: 0
-    };
+    const se = Math.sqrt(sigma2 * of(0, at));
+    const df = method.df(of(1, at), of(2, at));
+    const usable = se >= 0 && se < Infinity && df > 0 && df < Infinity;
+    const estimate = common + beta[at]!;
+    return { ...none, estimate, se: usable ? se : null, df: usable ? df : null, scope: 'all', part: 0 };
   });
   const dfs = lines.flatMap((line) => (line.df === null ? [] : [line.df]));
   const critical = criticalValues(alpha, dfs.length, Math.min(...dfs), Math.max(...dfs), dfs.length);

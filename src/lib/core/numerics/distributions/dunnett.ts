@@ -53,7 +53,12 @@ export function largestT(
   effort: QuasiMonteCarlo | 'expand' = USUAL_EFFORT
 ): LargestT {
   const { loadings, residual } = fitOneFactor(correlation, m);
-  const product = (c: number) => largestOneFactor(c, loadings, sides);
+  const seen = new Map<number, BothTails>();
+  const product = (c: number): BothTails => {
+    let tails = seen.get(c);
+    if (!tails) seen.set(c, (tails = largestOneFactor(c, loadings, sides)));
+    return tails;
+  };
   const start = (alpha: number, df: number) =>
     tUpperQuantile(Math.min(0.49, alpha / (sides === 'two' ? 2 * m : m)), df);
   const exact = scaled((c) => product(c).upper, m, sides);

@@ -25,10 +25,11 @@ export interface BothTails {
  */
 export function largestOneFactor(c: number, loadings: Float64Array, sides: Sides): BothTails {
   if (sides === 'two' && c <= 0) return { upper: 1, inside: 0 };
-  const m = loadings.length;
-  const spreads = loadings.map((l) => 1 / Math.sqrt((1 - l) * (1 + l)));
+  const { loadings: distinct, counts } = gathered(loadings);
+  const m = distinct.length;
+  const spreads = distinct.map((l) => 1 / Math.sqrt((1 - l) * (1 + l)));
   let steepest = 0;
-  for (let i = 0; i < m; i++) steepest = Math.max(steepest, Math.abs(loadings[i]! * spreads[i]!));
+  for (let i = 0; i < m; i++) steepest = Math.max(steepest, Math.abs(distinct[i]! * spreads[i]!));
   const step = Math.min(0.25, 0.5 / Math.sqrt(1 + steepest * steepest));
   let upper = 0;
   let inside = 0;
@@ -36,10 +37,10 @@ export function largestOneFactor(c: number, loadings: Float64Array, sides: Sides
     const weight = step * normalDensity(x);
     let log = 0;
     for (let i = 0; i < m; i++) {
-      const shift = loadings[i]! * x;
+      const shift = distinct[i]! * x;
       let p = normalUpper((c - shift) * spreads[i]!);
       if (sides === 'two') p += normalUpper((c + shift) * spreads[i]!);
-      log += Math.log1p(-Math.min(1, p));
+      log += counts[i]! * Math.log1p(-Math.min(1, p));
     }
     upper -= weight * Math.expm1(log);
     inside += weight * Math.exp(log);
@@ -52,4 +53,11 @@ export function largestOneFactor(c: number, loadings: Float64Array, sides: Sides
       if (add(direction * i * step) < 1e-18 * Math.min(upper, inside)) break;
   }
   return { upper: Math.min(1, upper), inside: Math.min(1, inside) };
+}
+
+/** Equal loadings are counted once: with equal correlations the cost no longer grows with m. */
+function gathered(loadings: Float64Array): { loadings: Float64Array; counts: Float64Array } {
+  const counts = new Map<number, number>();
+  for (const loading of loadings) counts.set(loading, (counts.get(loading) ?? 0) + 1);
+  return { loadings: Float64Array.from(counts.keys()), counts: Float64Array.from(counts.values()) };
 }

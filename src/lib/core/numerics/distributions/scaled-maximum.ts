@@ -33,7 +33,9 @@ export class ScaledMaximum {
   constructor(statistic: NormalStatistic) {
     this.#statistic = statistic;
     const { tail, from, to } = statistic;
-    this.#logTail = new PiecewiseChebyshev((c) => Math.log(tail(c)), from, to, PIECE, DEGREE);
+    // Where the tail underflows it is held at the smallest double, so that the last piece stays finite.
+    const logTail = (c: number) => Math.log(Math.max(tail(c), Number.MIN_VALUE));
+    this.#logTail = new PiecewiseChebyshev(logTail, from, to, PIECE, DEGREE);
   }
 
   /** P(statistic / s > q); df above 0, fractional or Infinity. Cost: some 60 table look-ups. */
