@@ -1,6 +1,8 @@
 import type { Analysis, MeanLine, PairLine, PairSummary } from '../../core/analysis/analysis-result.ts';
 import type { Observations, PrimaryModel } from '../../core/analysis/observations.ts';
+import type { Measurand } from '../../core/campaign/plan.ts';
 import { decimalsFor } from '../format/number-writer.ts';
+import { unitText } from '../format/unit-text.ts';
 
 /** The quantity on the screen. */
 export interface Measured {
@@ -11,6 +13,15 @@ export interface Measured {
   /** Smallest difference that matters, if the plan says. */
   difference: number | null;
 }
+
+/** The quantity of a plan's measurand, its unit as people write it. */
+export const measuredOf = ({ id, label, unit, decimals, difference }: Measurand): Measured => ({
+  id,
+  label,
+  unit: unitText(unit),
+  decimals,
+  difference
+});
 
 /** All a result component needs: what went in, what came out, what it is called. */
 export interface ResultView {

@@ -1,5 +1,4 @@
-import { plots as de } from './de/plots.ts';
 import { plots as en } from './en/plots.ts';
 import { inLanguage } from './locale.svelte.ts';
 
-export const plotTexts = inLanguage({ en, de });
+export const plotTexts = inLanguage<typeof en>({ en, de: async () => (await import('./de/plots.ts')).plots });

@@ -1,9 +1,3 @@
-import { answer as answerDe } from './de/answer.ts';
-import { how as howDe } from './de/how.ts';
-import { layers as layersDe } from './de/layers.ts';
-import { reasons as reasonsDe } from './de/reasons.ts';
-import { results as resultsDe } from './de/results.ts';
-import { warnings as warningsDe } from './de/warnings.ts';
 import { answer as answerEn } from './en/answer.ts';
 import { how as howEn } from './en/how.ts';
 import { layers as layersEn } from './en/layers.ts';
@@ -24,14 +18,4 @@ const en = {
 export type ResultWords = typeof en;
 
 /** Everything the results say, by the kind of thing said. */
-export const resultWords = inLanguage<ResultWords>({
-  en,
-  de: {
-    answer: answerDe,
-    how: howDe,
-    layers: layersDe,
-    reasons: reasonsDe,
-    results: resultsDe,
-    warnings: warningsDe
-  }
-});
+export const resultWords = inLanguage<ResultWords>({ en, de: () => import('./de/all-results.ts') });

@@ -70,13 +70,13 @@ export function reportHtml(document: ReportDocument): string {
 <title>${escapeHtml(document.title)}</title>
 <style>${reportStyle}</style>
 </head>
-<body>
+<body class="report">
 <header>
 <h1>${escapeHtml(document.title)}</h1>
 ${document.subtitle === '' ? '' : `<p>${escapeHtml(document.subtitle)}</p>`}
 ${mark}
 </header>
-<main>
+<main class="main">
 ${body}
 </main>
 <footer>${escapeHtml(document.footer)}</footer>

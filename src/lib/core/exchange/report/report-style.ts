@@ -2,7 +2,8 @@
 export const reportStyle = `
 :root { color-scheme: light; }
 * { box-sizing: border-box; }
-body {
+body { margin: 0; }
+.report {
   margin: 0 auto; padding: 2.5rem 1.5rem; max-width: 52rem;
   background: #fff; color: #1a2129;
   font: 400 0.94rem/1.45 'Segoe UI', 'Noto Sans', Roboto, 'Helvetica Neue', Arial, sans-serif;
@@ -13,7 +14,7 @@ header { padding-bottom: 1rem; border-bottom: 5px solid #0a5c63; }
 h1 { font-size: 1.9rem; line-height: 1.15; letter-spacing: -0.015em; }
 header p { margin-top: 0.4rem; color: #4a545d; }
 .mark { display: inline-block; margin-top: 0.6rem; padding: 0.1rem 0.6rem; border: 1.5px solid #4a3f8f; border-radius: 0.3rem; color: #4a3f8f; font-weight: 650; }
-main > * { margin-top: 0.9rem; }
+.main > * { margin-top: 0.9rem; }
 h2 { margin-top: 2.2rem; padding-top: 0.6rem; border-top: 1px solid #c9c5b8; font-size: 1.35rem; line-height: 1.25; break-after: avoid; }
 h3 { margin-top: 1.5rem; font-size: 1.05rem; break-after: avoid; }
 p { max-width: 46rem; }
@@ -38,7 +39,7 @@ figcaption { margin-top: 0.3rem; color: #4a545d; font-size: 0.86rem; }
 footer { margin-top: 2.5rem; padding-top: 0.6rem; border-top: 1px solid #c9c5b8; color: #4a545d; font-size: 0.82rem; }
 @media print {
   @page { margin: 16mm 15mm 18mm; }
-  body { max-width: none; padding: 0; font-size: 9.6pt; }
+  .report { max-width: none; padding: 0; font-size: 9.6pt; }
   .page { break-before: page; margin-top: 0; border-top: 0; padding-top: 0; }
   thead { display: table-header-group; }
   tr, dt, dd, li { break-inside: avoid; }
