@@ -15,7 +15,7 @@ export interface WorkerDied {
  * An abort ends the worker at once and resolves with the best that was reported so far (`cancelled: true`), so it takes no
  * longer than a message.
  *
- * **Checked by** test/workers/propose-designs.test.ts, test/e2e/propose-designs.spec.ts
+ * **Checked by** test/workers/propose-designs.test.ts, test/e2e/same-design.spec.ts
  */
 export function proposeInWorker(
   request: DesignRequest,
@@ -37,8 +37,10 @@ export function proposeInWorker(
     const abort = () => end(soFar());
     signal?.addEventListener('abort', abort);
     worker.onmessage = ({ data }: MessageEvent<ProposeReply>) => {
-      if (data.tag === 'progress') onProgress?.((latest = data.progress));
-      else if (data.tag === 'answer') end(data.answer);
+      if (data.tag === 'progress') {
+        latest = data.progress;
+        onProgress?.(latest);
+      } else if (data.tag === 'answer') end(data.answer);
       else end(fail({ tag: 'worker-died', detail: data.detail }));
     };
     worker.onerror = (event) => end(fail({ tag: 'worker-died', detail: event.message || 'the worker did not start' }));

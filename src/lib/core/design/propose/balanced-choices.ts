@@ -63,7 +63,7 @@ export function* balancedChoices(
   for (const { r, b } of candidates(request, k, counts)) {
     if (b > limit || r > scarcest || (shown >= MOST_SHOWN && k < request.treatments)) return;
     if (given !== null && b !== given) continue;
-    const answer = balancedDesign(request.treatments, k, r);
+    const answer = balancedDesign(request.treatments, k, r, { resolvable: request.resolvable });
     const found = answer.status === 'exists' && (!request.resolvable || answer.design.resolution !== undefined);
     if (found) shown++;
     yield found ? choiceOf(request, answer.design) : null;
