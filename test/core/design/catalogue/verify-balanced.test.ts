@@ -12,6 +12,20 @@ test('verifyBalanced(blocks, t) refuses a design in which one pair meets too oft
   expect(verifyBalanced([...SEVEN.slice(1), [0, 1, 2]], 7)).toBeNull();
 });
 
+test('verifyBalanced(blocks, t) refuses a ring of pairs, in which every treatment comes equally often but not every pair', () => {
+  expect(
+    verifyBalanced(
+      [
+        [0, 1],
+        [1, 2],
+        [2, 3],
+        [3, 0]
+      ],
+      4
+    )
+  ).toBeNull();
+});
+
 test('verifyBalanced(blocks, t) refuses a treatment twice in a session', () => {
   expect(
     verifyBalanced(

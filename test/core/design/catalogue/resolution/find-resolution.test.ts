@@ -74,4 +74,5 @@ test('isResolution(classes, blocks, t) refuses a block used twice, one left out,
       4
     )
   ).toBe(false);
+  expect(isResolution([[0, 1, 2, 3]], blocks, 4)).toBe(false);
 });

@@ -3,24 +3,19 @@ import type { Parameters } from '../parameters.ts';
 
 /**
  * Why the sessions of no design of these parameters can fall into groups that hold each treatment once, or null where
- * nothing known forbids it: k must divide t; b ≥ t + r − 1, and where that is an equality any two sessions of different
- * groups have k²/t treatments in common, so that must be a whole number.
+ * nothing known forbids it: k must divide t; then b ≥ t + r − 1 follows from b ≥ t, and where that is an equality any two
+ * sessions of different groups have k²/t treatments in common, so that must be a whole number.
  *
- * @param p parameters of a design with k < t
+ * @param p parameters with k < t ≤ b
  *
- * Source: R. C. Bose (1942), A note on the resolvability of balanced incomplete block designs, Sankhyā 6, 105–110.
+ * Source: R. C. Bose (1942), A note on the resolvability of balanced incomplete block designs, Sankhyā 6, 105–110; b ≥ t + r − 1
+ * without resolvability: S. N. Roy (1952), A note on incomplete blocks, Ann. Math. Statist. 23, 295 (from memory).
  * Checked by: test/core/design/catalogue/resolution/resolvable-design.test.ts
  */
 export function resolvableNonExistence(p: Parameters): { theorem: NonExistenceTheorem; why: string } | null {
   const { t, b, r, k, lambda } = p;
   if (t % k !== 0) {
     return { theorem: 'divisibility', why: `Sessions of ${k} cannot hold each of ${t} treatments once.` };
-  }
-  if (b < t + r - 1) {
-    return {
-      theorem: 'bose',
-      why: `Bose's inequality: groups of sessions that hold each treatment once need at least ${t + r - 1} sessions.`
-    };
   }
   if (b === t + r - 1 && (k * k) % t !== 0) {
     return {
