@@ -66,7 +66,8 @@ export function construct(p: Parameters, wish: Wish): Candidate | null {
     (q) => sum(q, wish),
     (q) => differenceSearch(q, 'plain', { tries: 40, steps: 500 }),
     (q) => differenceSearch(q, 'further', { tries: 10, steps: 500 }),
-    (q) => differenceSearch(q, 'plain', { tries: 10, steps: 20_000 })
+    (q) => differenceSearch(q, 'further', { tries: 40, steps: 2000 }),
+    (q) => differenceSearch(q, 'plain', { tries: 80, steps: 2000 })
   ];
   return firstOf(constructions, p, wish);
 }

@@ -1,8 +1,10 @@
+import { seededRandom } from '../../../numerics/random/seeded-random.ts';
 import type { Construction } from '../candidate.ts';
 import { consecutiveClasses } from './round-robin.ts';
 
-/** Search steps before giving up. */
-const ALLOWANCE = 200_000;
+/** Tries before giving up, and steps of each; every try after the first goes in a drawn order. */
+const TRIES = 60;
+const STEPS = 2000;
 
 /**
  * Resolvable designs with r = t − 1 and λ = k − 1 from one parallel class on Z_(t−1) and a fixed treatment, whose
@@ -29,8 +31,19 @@ export const rotationalClasses: Construction = ({ t, k, r, lambda }) => {
   };
 };
 
-/** Z_n and a fixed point n in blocks of k, every non-zero difference k − 1 times, or null. */
+/** Z_n and a fixed point n in blocks of k, every non-zero difference k − 1 times, or null when no try finds one. */
 function baseClass(n: number, k: number): number[][] | null {
+  for (let attempt = 0; attempt < TRIES; attempt++) {
+    const order = Array.from({ length: n }, (_, x) => x);
+    if (attempt > 0) seededRandom(attempt).shuffle(order);
+    const found = depthFirst(n, k, order);
+    if (found.blocks || !found.gaveUp) return found.blocks;
+  }
+  return null;
+}
+
+/** One try: blocks are filled one after the other, elements tried in the given order. */
+function depthFirst(n: number, k: number, order: readonly number[]): { blocks: number[][] | null; gaveUp: boolean } {
   const times = new Int32Array(n);
   const placed = new Uint8Array(n);
   const blocks: number[][] = [[n]];
@@ -49,25 +62,28 @@ function baseClass(n: number, k: number): number[][] | null {
     return fits;
   };
 
+  const open = (): boolean => {
+    const next = order.findIndex((x) => placed[x] === 0);
+    if (next === -1) return true;
+    placed[order[next]!] = 1;
+    blocks.push([order[next]!]);
+    if (fill(next + 1)) return true;
+    blocks.pop();
+    placed[order[next]!] = 0;
+    return false;
+  };
+
   const fill = (from: number): boolean => {
     const block = blocks.at(-1)!;
-    if (block.length === k) {
-      const next = placed.indexOf(0);
-      if (next === -1) return true;
-      placed[next] = 1;
-      blocks.push([next]);
-      if (fill(next + 1)) return true;
-      blocks.pop();
-      placed[next] = 0;
-      return false;
-    }
-    for (let x = from; x < n; x++) {
+    if (block.length === k) return open();
+    for (let i = from; i < n; i++) {
+      const x = order[i]!;
       if (placed[x] === 1) continue;
-      if (++steps > ALLOWANCE) return false;
+      if (++steps > STEPS) return false;
       if (count(x, block, 1)) {
         placed[x] = 1;
         block.push(x);
-        if (fill(x + 1)) return true;
+        if (fill(i + 1)) return true;
         block.pop();
         placed[x] = 0;
       }
@@ -75,5 +91,5 @@ function baseClass(n: number, k: number): number[][] | null {
     }
     return false;
   };
-  return fill(0) ? blocks : null;
+  return fill(0) ? { blocks, gaveUp: false } : { blocks: null, gaveUp: steps > STEPS };
 }
