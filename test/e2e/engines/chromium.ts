@@ -8,6 +8,7 @@ export async function startChromium(): Promise<Driver | null> {
   if (!executablePath) return null;
   const browser = await chromium.launch({ executablePath, args: ['--no-sandbox', '--disable-gpu', '--no-first-run'] });
   const page = await browser.newPage({ viewport: { width: 1180, height: 820 } });
+  page.setDefaultTimeout(20_000);
   return {
     engine: `Chromium ${browser.version()}`,
     goto: async (url) => void (await page.goto(url)),

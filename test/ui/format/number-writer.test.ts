@@ -54,6 +54,10 @@ describe('decimalsFor(se, digits, otherwise)', () => {
 });
 
 describe('numberLocale(language, preferred)', () => {
+  test('passes over what is no language tag, as the "C" of a bare POSIX system', () => {
+    expect(numberLocale('en', ['C'])).toBe('en');
+    expect(numberLocale('de', ['C', 'de-AT'])).toBe('de-AT');
+  });
   test("takes the person's variant of the screen language, else the first preference", () => {
     expect(numberLocale('de', ['en-US', 'de-CH'])).toBe('de-CH');
     expect(numberLocale('en', ['fr-FR', 'fr'])).toBe('fr-FR');

@@ -27,8 +27,18 @@ export function decimalsFor(se: number | null, digits: number, otherwise: number
  * `preferred` is the browser's list.
  */
 export function numberLocale(language: string, preferred: readonly string[]): string {
-  const own = preferred.find((tag) => tag.toLowerCase().split('-')[0] === language);
-  return own ?? preferred[0] ?? language;
+  const known = preferred.filter(isLanguageTag);
+  const own = known.find((tag) => tag.toLowerCase().split('-')[0] === language);
+  return own ?? known[0] ?? language;
+}
+
+/** A browser may hand on what its system says: "C" of a bare POSIX system is no language tag, and Intl refuses it. */
+function isLanguageTag(tag: string): boolean {
+  try {
+    return Intl.getCanonicalLocales(tag).length > 0;
+  } catch {
+    return false;
+  }
 }
 
 export function numberWriter(locale: string): NumberWriter {
