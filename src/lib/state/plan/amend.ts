@@ -1,6 +1,7 @@
 import type { DataOf } from '#lib/core/campaign/event.ts';
 import type { PlannedSession } from '#lib/core/campaign/plan.ts';
 import type { CampaignState } from '#lib/core/campaign/state.ts';
+import { unusedSpares } from '#lib/core/campaign/steps/unused-spares.ts';
 import { drawSpecimenCodes } from '#lib/core/design/specimen-codes.ts';
 import { seededRandom } from '#lib/core/numerics/random/seeded-random.ts';
 
@@ -19,30 +20,27 @@ export function repeatOf(
   const session = state.sessions.find(({ id }) => id === again);
   const { issued } = state;
   if (!session || !issued) return null;
-  const used = new Set(state.sessions.flatMap(({ plan, runs }) => codesOf(plan, runs)));
-  const spares = issued.spares.filter(({ specimen }) => !used.has(specimen));
-  for (const { specimen } of issued.spares) used.add(specimen);
-  const fresh = freshCodes(session.plan.slots.length, used, seed);
-  const taken = new Set<string>();
+  const fresh = freshCodes(state, session.plan.slots.length, seed);
+  const taken = new Map<string, number>();
   const slots = session.plan.slots.map((slot) => {
     if (slot === null) return null;
-    const spare = withSpares
-      ? spares.find(({ treatment, specimen }) => treatment === slot.treatment && !taken.has(specimen))
-      : undefined;
-    if (spare) taken.add(spare.specimen);
-    return { treatment: slot.treatment, specimen: spare?.specimen ?? fresh.next().value ?? '' };
+    const nth = taken.get(slot.treatment) ?? 0;
+    const spare = withSpares ? unusedSpares(state, slot.treatment)[nth] : undefined;
+    if (spare !== undefined) taken.set(slot.treatment, nth + 1);
+    return { treatment: slot.treatment, specimen: spare ?? fresh.next().value ?? '' };
   });
   const number = Math.max(0, ...state.sessions.map(({ plan }) => plan.number)) + 1;
   const shift = Math.max(1, ...state.sessions.map(({ plan }) => plan.shift));
   return { id: freeId(state, number), number, shift, machine: session.plan.machine, slots, repeats: again };
 }
 
-const codesOf = (plan: PlannedSession, runs: CampaignState['sessions'][number]['runs']): string[] => [
-  ...plan.slots.flatMap((slot) => (slot ? [slot.specimen] : [])),
-  ...runs.map(({ specimen }) => specimen)
-];
-
-function* freshCodes(count: number, used: ReadonlySet<string>, seed: string): Generator<string, undefined> {
+/** Codes that no specimen of the campaign bears. */
+function* freshCodes(state: CampaignState, count: number, seed: string): Generator<string, undefined> {
+  const used = new Set(state.issued?.spares.map(({ specimen }) => specimen));
+  for (const { plan, runs } of state.sessions) {
+    for (const slot of plan.slots) if (slot) used.add(slot.specimen);
+    for (const { planned, loaded } of runs) used.add(planned.specimen).add(loaded?.specimen ?? planned.specimen);
+  }
   const drawn = drawSpecimenCodes(used.size + count, seededRandom(`repeat ${seed}`));
   for (const code of drawn) if (!used.has(code)) yield code;
   return undefined;
