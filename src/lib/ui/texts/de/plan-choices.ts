@@ -11,6 +11,7 @@ const plainTimes = (n: number) => `${n}-mal`;
 export const planChoices: typeof en = {
   heading: 'Wie viele Sitzungen sind genug?',
   demoMark: 'erfundene Beispieldaten',
+  toChoices: 'Möglichkeiten',
   waiting: 'Sobald es zwei Behandlungen und eine Maschine mit einem Platz gibt, stehen hier die Möglichkeiten.',
   sentence: (c): string => {
     const all = c.size.min === c.treatments && c.size.max === c.treatments;

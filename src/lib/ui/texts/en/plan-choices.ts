@@ -10,6 +10,7 @@ const plainTimes = (n: number) => `${n} times`;
 export const planChoices = {
   heading: 'How many sessions are enough?',
   demoMark: 'invented demo data',
+  toChoices: 'Choices',
   waiting: 'As soon as there are two treatments and a machine with a slot, the choices stand here.',
   /** The design as a person would say it aloud. */
   sentence: (c: {

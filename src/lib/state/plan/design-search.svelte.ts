@@ -1,0 +1,106 @@
+import type {
+  DesignChoice,
+  DesignRequest,
+  Progress,
+  ProposeError,
+  Proposal,
+  Reason
+} from '#lib/core/design/propose-types.ts';
+import { proposeInWorker } from '#lib/workers/propose-designs.ts';
+
+/** Waits so long after the last change before a search begins. */
+const pause = 250;
+
+/** The search for designs that answers the request as it stands: started anew at every change, cancelled at will. */
+export class DesignSearch {
+  #choices = $state.raw<readonly DesignChoice[]>([]);
+  #recommended = $state.raw<{ id: string; reason: Reason } | null>(null);
+  #smallestBalanced = $state.raw<Proposal['smallestBalanced']>(null);
+  #error = $state.raw<ProposeError | null>(null);
+  #status = $state<'idle' | 'running' | 'done' | 'cancelled' | 'failed'>('idle');
+  #done = $state(0);
+  #question = '';
+  #timer: ReturnType<typeof setTimeout> | undefined;
+  #running: AbortController | null = null;
+
+  get choices(): readonly DesignChoice[] {
+    return this.#choices;
+  }
+  get recommended() {
+    return this.#recommended;
+  }
+  get smallestBalanced() {
+    return this.#smallestBalanced;
+  }
+  get error() {
+    return this.#error;
+  }
+  get status() {
+    return this.#status;
+  }
+  /** 0 … 1 */
+  get done() {
+    return this.#done;
+  }
+
+  /** Asks for designs; the same question again changes nothing. Returns true when it is a new one. */
+  ask(request: DesignRequest | null): boolean {
+    const question = request === null ? '' : JSON.stringify(request);
+    if (question === this.#question) return false;
+    this.stop();
+    this.#question = question;
+    this.#choices = [];
+    this.#recommended = null;
+    this.#smallestBalanced = null;
+    this.#error = null;
+    this.#done = 0;
+    this.#status = request === null ? 'idle' : 'running';
+    if (request !== null) this.#timer = setTimeout(() => void this.#run(request), pause);
+    return true;
+  }
+
+  async #run(request: DesignRequest): Promise<void> {
+    const running = new AbortController();
+    this.#running = running;
+    const answer = await proposeInWorker(request, {
+      signal: running.signal,
+      onProgress: (progress) => {
+        if (this.#running === running) this.#take(progress);
+      }
+    });
+    if (this.#running !== running) return;
+    this.#running = null;
+    if (!answer.ok) {
+      if (answer.error.tag === 'worker-died') this.#status = 'failed';
+      else {
+        this.#error = answer.error;
+        this.#status = 'done';
+      }
+      return;
+    }
+    this.#choices = answer.value.choices;
+    this.#recommended = answer.value.recommended;
+    this.#smallestBalanced = answer.value.smallestBalanced;
+    this.#status = answer.value.cancelled ? 'cancelled' : 'done';
+  }
+
+  #take({ done, choices, recommended }: Progress): void {
+    this.#done = done;
+    this.#choices = choices;
+    this.#recommended = recommended;
+  }
+
+  /** Ends the search and keeps the best so far. */
+  cancel(): void {
+    if (this.#running === null) return;
+    this.#status = 'cancelled';
+    this.#running.abort();
+  }
+
+  /** Ends the search without a word: another question follows, or the page goes. */
+  stop(): void {
+    clearTimeout(this.#timer);
+    this.#running?.abort();
+    this.#running = null;
+  }
+}
