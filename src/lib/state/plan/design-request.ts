@@ -35,11 +35,19 @@ export function designRequest(
     scatter: measurand?.kind === 'rank' ? null : (measurand?.scatter ?? null),
     difference: measurand?.kind === 'rank' ? null : (measurand?.difference ?? null),
     alpha: plan.primary?.alpha ?? 0.05,
+    adjustment: basisOf(plan),
     minutesPerSession: plan.minutesPerSession,
     seed: 'choices',
     effort
   };
 }
+
+/**
+ * Which detectable difference a plan is judged by. Dunnett's and Hsu's lie between a pair by itself and Tukey's: taking
+ * Tukey's errs to the side of more sessions.
+ */
+export const basisOf = (plan: Plan): 'tukey' | 'unadjusted' =>
+  plan.primary?.adjustment === 'none' ? 'unadjusted' : 'tukey';
 
 function controls(draft: PlanDraft, plan: Plan): ControlRequest | null {
   const treatments = plan.treatments.flatMap(({ control }, i) => (control ? [i] : []));

@@ -6,6 +6,7 @@ export interface ChoicesSceneOptions {
   width: number;
   locale: string;
   choices: readonly DesignChoice[];
+  basis: Basis;
   chosen: string | null;
   /** The difference that matters, in the unit of the choices; null: not said. */
   difference: number | null;
@@ -20,8 +21,11 @@ export interface ChoicesSceneOptions {
   };
 }
 
-/** What a design finds in 9 of 10 cases, one pair by itself; null when nothing can be said. */
-export const finds = (choice: DesignChoice): number | null => choice.precision.power90?.unadjusted ?? null;
+/** Which detectable difference is compared: of all pairs with Tukey's adjustment, or of one pair by itself. */
+export type Basis = 'tukey' | 'unadjusted';
+
+/** What a design finds in 8 of 10 cases; null when nothing can be said. */
+export const finds = (choice: DesignChoice, basis: Basis): number | null => choice.precision.power80?.[basis] ?? null;
 
 /**
  * Sessions against the detectable difference. A balanced design is a load on a level beam, another one an open disc; the
@@ -31,7 +35,7 @@ export function choicesScene(options: ChoicesSceneOptions): Scene {
   const { width, words, difference } = options;
   const height = Math.round(Math.max(220, Math.min(300, width * 0.5)));
   const shown = options.choices.flatMap((choice) => {
-    const value = finds(choice);
+    const value = finds(choice, options.basis);
     return value === null ? [] : [{ choice, value }];
   });
   const most = Math.max(1, ...shown.map(({ choice }) => choice.sessions));

@@ -1,5 +1,4 @@
-import { plan as de } from './de/plan.ts';
 import { plan as en } from './en/plan.ts';
 import { inLanguage } from './locale.svelte.ts';
 
-export const planTexts = inLanguage({ en, de });
+export const planTexts = inLanguage({ en, de: async () => (await import('./de/plan.ts')).plan });

@@ -32,7 +32,7 @@ export const planChoices: typeof en = {
   reason: (reason: Reason, write): string => {
     switch (reason.tag) {
       case 'finds-difference':
-        return `Empfohlen, weil es der kürzeste Plan ist, der einen Unterschied von ${write.value(reason.difference)} findet: mit ${reason.sessions} Sitzungen werden ${write.value(reason.detectable)} in 9 von 10 Fällen gefunden.`;
+        return `Empfohlen, weil es der kürzeste Plan ist, der einen Unterschied von ${write.value(reason.difference)} findet: mit ${reason.sessions} Sitzungen werden ${write.value(reason.detectable)} in 8 von 10 Fällen gefunden.`;
       case 'most-precise-in-budget':
         return `Empfohlen, weil unter den möglichen Sitzungen keiner genauer ist: ${reason.sessions} Sitzungen finden ${write.value(reason.detectable)}.`;
       case 'balanced-in-budget':
@@ -75,13 +75,14 @@ export const planChoices: typeof en = {
     summary: (n: number) =>
       `${n} Möglichkeiten; weniger Sitzungen liegen links, kleinere auffindbare Unterschiede unten. Ausgewogene Pläne sind gefüllte Quadrate auf einem Balken.`,
     x: 'Sitzungen',
-    y: (unit: string) => `In 9 von 10 Fällen gefundener Unterschied${unit}`,
+    y: (basis: string, unit: string) => `In 8 von 10 Fällen gefunden, ${basis}${unit ? `, in ${unit}` : ''}`,
     matters: 'zählt',
     point: (sessions: number, finds: string, kind: string) => `${sessions} Sitzungen finden ${finds}, ${kind}`,
     columns: ['Sitzungen', 'Findet', 'Art'],
     legend: { balanced: 'ausgewogen', near: 'nicht ausgewogen', chosen: 'gewählt' },
     none: 'Ohne Freiheitsgrade des Fehlers lässt sich über auffindbare Unterschiede nichts sagen.'
   },
+  basis: { tukey: 'alle Paare (Tukey)', unadjusted: 'ein Paar' },
   sigma: 'σ',
   sigmaNote: 'In Einheiten der Streuung σ, bis gesagt ist, wie groß sie ist.',
   detail: {

@@ -38,7 +38,7 @@ export const planChoices = {
   reason: (reason: Reason, write: { value: (n: number) => string }): string => {
     switch (reason.tag) {
       case 'finds-difference':
-        return `Recommended because it is the shortest that finds a difference of ${write.value(reason.difference)}: with ${reason.sessions} sessions ${write.value(reason.detectable)} is found in 9 of 10 cases.`;
+        return `Recommended because it is the shortest that finds a difference of ${write.value(reason.difference)}: with ${reason.sessions} sessions ${write.value(reason.detectable)} is found in 8 of 10 cases.`;
       case 'most-precise-in-budget':
         return `Recommended because no other within the sessions you can afford is more precise: ${reason.sessions} sessions find ${write.value(reason.detectable)}.`;
       case 'balanced-in-budget':
@@ -81,13 +81,14 @@ export const planChoices = {
     summary: (n: number) =>
       `${n} choices; fewer sessions lie left, smaller detectable differences lie low. Balanced designs are filled squares on a beam.`,
     x: 'Sessions',
-    y: (unit: string) => `Difference found in 9 of 10 cases${unit}`,
+    y: (basis: string, unit: string) => `Found in 8 of 10 cases, ${basis}${unit ? `, in ${unit}` : ''}`,
     matters: 'matters',
     point: (sessions: number, finds: string, kind: string) => `${sessions} sessions find ${finds}, ${kind}`,
     columns: ['Sessions', 'Finds', 'Kind'],
     legend: { balanced: 'balanced', near: 'not balanced', chosen: 'chosen' },
     none: 'With no error degrees of freedom nothing can be said about detectable differences.'
   },
+  basis: { tukey: 'all pairs (Tukey)', unadjusted: 'one pair' },
   sigma: 'σ',
   sigmaNote: 'In units of the scatter σ, until you say how large it is.',
   detail: {
