@@ -3,6 +3,7 @@ import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { pathToFileURL } from 'node:url';
 import { balancedDesign } from '#lib/core/design/catalogue/balanced-design.ts';
+import { isResolution } from '#lib/core/design/catalogue/resolution/find-resolution.ts';
 import { verifyBalanced } from '#lib/core/design/catalogue/verify-balanced.ts';
 
 interface AnchorSet {
@@ -76,6 +77,27 @@ function summary(title: string, rows: ExistenceRow[]): string {
   return `${title.padEnd(28)} exist ${count('exists')}  impossible ${count('impossible')}  open ${count('open')}  median ${median(times).toFixed(1)} ms  worst ${Math.max(...times).toFixed(0)} ms`;
 }
 
+/** Asks for parallel classes wherever the anchors say whether they exist. */
+function resolvableSummary(folder = process.env.DESIGNS_DIR ?? 'test/reference/designs'): string {
+  const { sets } = JSON.parse(readFileSync(join(folder, 'existence.json'), 'utf8')) as {
+    sets: (AnchorSet & { resolvable?: { status: string } })[];
+  };
+  const found = (status: string, wanted: string) => {
+    const of = sets.filter((set) => set.status === 'exists' && set.resolvable?.status === status);
+    const right = of.filter(({ v, k, r, b }) => {
+      const answer = balancedDesign(v, k, r, { resolvable: true });
+      if (answer.status !== 'exists') return answer.status === wanted;
+      const { resolution, blocks } = answer.design;
+      return wanted === 'exists' && verifyBalanced(blocks, v)?.b === b && isResolution(resolution ?? [], blocks, v);
+    });
+    return `${right.length}/${of.length}`;
+  };
+  return `${'in shifts (parallel classes)'.padEnd(28)} exist ${found('yes', 'exists')}  impossible ${found('no', 'impossible')}  open ${found('open', 'open')}`;
+}
+
+/** Longest time that an answer with r ≤ 10 may take, in milliseconds. */
+const LIMIT = 2000;
+
 if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) {
   const rows = runExistence();
   for (const row of rows.filter((each) => !each.right || each.milliseconds > 200)) {
@@ -85,12 +107,8 @@ if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) {
     );
   }
   const half = rows.filter((row) => 2 * row.k <= row.t);
-  console.log(
-    summary(
-      'k ≤ t/2, r ≤ 10',
-      half.filter((row) => row.r <= 10)
-    )
-  );
+  const main = half.filter((row) => row.r <= 10);
+  console.log(summary('k ≤ t/2, r ≤ 10', main));
   console.log(summary('k ≤ t/2, r ≤ 15', half));
   console.log(
     summary(
@@ -98,4 +116,9 @@ if (import.meta.url === pathToFileURL(process.argv[1] ?? '').href) {
       rows.filter((row) => 2 * row.k > row.t)
     )
   );
+  console.log(resolvableSummary());
+  if (main.some((row) => !row.right || row.milliseconds > LIMIT)) {
+    console.log(`FAILED: a set with r ≤ 10 is answered wrongly or takes more than ${LIMIT} ms`);
+    process.exitCode = 1;
+  }
 }
