@@ -19,7 +19,7 @@ function gaussian(n: number, m: number, q: number): number {
  * blocks the (d+1)-dimensional ones.
  *
  * Source: R. C. Bose (1939), Ann. Eugenics 9, section 3.
- * Checked by: test/core/design/catalogue/finite-geometry.test.ts
+ * Checked by: test/core/design/catalogue/constructions/finite-geometry.test.ts
  */
 export function projectiveFlats(n: number, d: number, q: number): Blocks | null {
   const field = finiteField(q);
@@ -45,7 +45,7 @@ export function projectiveFlats(n: number, d: number, q: number): Blocks | null 
  * GF(q)ⁿ, blocks the cosets of the d-dimensional subspaces, and each subspace's cosets form a parallel class.
  *
  * Source: R. C. Bose (1939), Ann. Eugenics 9, section 3.
- * Checked by: test/core/design/catalogue/finite-geometry.test.ts
+ * Checked by: test/core/design/catalogue/constructions/finite-geometry.test.ts
  */
 export function affineFlats(n: number, d: number, q: number): Blocks | null {
   const field = finiteField(q);

@@ -8,7 +8,7 @@ import { projectiveFlats } from './finite-geometry.ts';
  *
  * Source: M. Hall, R. Lane & D. Wales (1970), Designs derived from permutation groups, J. Combin. Theory 8, 12–22;
  * the graph: A. Gewirtz (1969), Canad. J. Math. 21, 1240–1248.
- * Checked by: test/core/design/catalogue/balanced-design.test.ts
+ * Checked by: test/core/design/catalogue/constructions/families.test.ts
  */
 export const hyperovalBiplane: Construction = ({ t, k, lambda }) => {
   if (t !== 56 || k !== 11 || lambda !== 2) return null;

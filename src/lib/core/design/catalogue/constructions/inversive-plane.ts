@@ -9,7 +9,7 @@ import type { Construction } from '../candidate.ts';
  *
  * Source: D. R. Hughes & F. C. Piper (1985), Design Theory, section 3.7 (inversive planes); the half: orbits of
  * PSL(2, q²), which is doubly transitive.
- * Checked by: test/core/design/catalogue/balanced-design.test.ts
+ * Checked by: test/core/design/catalogue/constructions/families.test.ts
  */
 export const inversivePlane: Construction = ({ t, k, lambda }) => {
   const q = k - 1;

@@ -8,7 +8,7 @@ import { consecutiveClasses } from './round-robin.ts';
  *
  * Source: D. K. Ray-Chaudhuri & R. M. Wilson (1971), Solution of Kirkman's schoolgirl problem, Proc. Sympos. Pure Math.
  * 19, 187–203, theorems 5 and 6.
- * Checked by: test/core/design/catalogue/resolution.test.ts
+ * Checked by: test/core/design/catalogue/constructions/families.test.ts
  */
 export const kirkmanTriples: Construction = ({ t, k, r, lambda }) => {
   if (k !== 3 || lambda !== 1 || t % 6 !== 3) return null;

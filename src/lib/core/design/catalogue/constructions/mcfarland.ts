@@ -7,7 +7,7 @@ import { subspaces } from './subspaces.ts';
  * are laid at s different levels of Z_(s+1). Gives t = q^(d+1)(s + 1), k = q^d s, λ = q^d (q^d − 1)/(q − 1).
  *
  * Source: R. L. McFarland (1973), A family of difference sets in non-cyclic groups, J. Combin. Theory A 15, 1–10.
- * Checked by: test/core/design/catalogue/balanced-design.test.ts
+ * Checked by: test/core/design/catalogue/constructions/families.test.ts
  */
 export const mcFarland: Construction = ({ t, k, b }) => {
   if (b !== t) return null;

@@ -9,7 +9,7 @@ import type { Construction } from '../candidate.ts';
  *
  * Source: R. E. A. C. Paley (1933), J. Math. Phys. 12, 311–320; E. Lehmer (1953), Canad. J. Math. 5, 425–432;
  * R. M. Wilson (1972), J. Number Theory 4, 17–47.
- * Checked by: test/core/design/catalogue/power-residues.test.ts
+ * Checked by: test/core/design/catalogue/constructions/families.test.ts
  */
 export const powerResidues: Construction = ({ t, k, b }) => {
   if (b % t !== 0) return null;

@@ -10,7 +10,7 @@ function restrict(blocks: Blocks, points: readonly number[]): Blocks {
  * The residual of a symmetric design: the first block and its points taken away.
  *
  * Source: R. C. Bose (1939), Ann. Eugenics 9, section 2.
- * Checked by: test/core/design/catalogue/residual-derived.test.ts
+ * Checked by: test/core/design/catalogue/constructions/residual-derived.test.ts
  */
 export function residual(symmetric: Blocks): Blocks {
   const first = new Set(symmetric[0]);
@@ -22,7 +22,7 @@ export function residual(symmetric: Blocks): Blocks {
  * The derived design of a symmetric design: the other blocks cut down to the points of the first.
  *
  * Source: R. C. Bose (1939), Ann. Eugenics 9, section 2.
- * Checked by: test/core/design/catalogue/residual-derived.test.ts
+ * Checked by: test/core/design/catalogue/constructions/residual-derived.test.ts
  */
 export function derived(symmetric: Blocks): Blocks {
   return restrict(symmetric.slice(1), symmetric[0]!);

@@ -12,7 +12,7 @@ const STEPS = 2000;
  *
  * Source: R. C. Bose (1939), Ann. Eugenics 9, section 4 (differences with a fixed treatment); classes: I. Anderson (1997),
  * Combinatorial Designs and Tournaments, chapter 5.
- * Checked by: test/core/design/catalogue/resolution/resolvable-design.test.ts
+ * Checked by: test/core/design/catalogue/constructions/families.test.ts
  */
 export const rotationalClasses: Construction = ({ t, k, r, lambda }) => {
   if (k < 3 || t % k !== 0 || lambda !== k - 1) return null;

@@ -5,7 +5,7 @@ import type { Construction } from '../candidate.ts';
  * turn in a circle. As often as the number of sessions allows.
  *
  * Source: E. Lucas (1883), Récréations mathématiques 2, sixth recreation (the round robin).
- * Checked by: test/core/design/catalogue/resolution.test.ts
+ * Checked by: test/core/design/catalogue/resolution/resolvable-design.test.ts
  */
 export const roundRobin: Construction = ({ t, k, lambda }) => {
   if (k !== 2 || t % 2 === 1) return null;

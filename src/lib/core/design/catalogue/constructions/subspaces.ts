@@ -14,7 +14,7 @@ type Vector = readonly number[];
  * Cost: n·q^m for each of the [n choose m]_q subspaces.
  *
  * Source: P. J. Cameron (1994), Combinatorics, section 9.2 (Gaussian coefficients through echelon forms).
- * Checked by: test/core/design/catalogue/finite-geometry.test.ts
+ * Checked by: test/core/design/catalogue/constructions/finite-geometry.test.ts
  */
 export function subspaces(field: FiniteField, n: number, m: number): Vector[][] {
   const q = field.order;

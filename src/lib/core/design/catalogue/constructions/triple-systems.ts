@@ -7,7 +7,7 @@ import type { Construction } from '../candidate.ts';
  *
  * Source: R. C. Bose (1939), Ann. Eugenics 9, 353–399; T. Skolem (1958), Math. Scand. 6, 273–280, both as told by
  * C. C. Lindner & C. A. Rodger (2008), Design Theory, 2nd ed., sections 1.2 and 1.3.
- * Checked by: test/core/design/catalogue/balanced-design.test.ts
+ * Checked by: test/core/design/catalogue/constructions/families.test.ts
  */
 export const steinerTriples: Construction = ({ t, k, lambda }) => {
   if (k !== 3 || lambda !== 1 || (t % 6 !== 1 && t % 6 !== 3) || t < 7) return null;

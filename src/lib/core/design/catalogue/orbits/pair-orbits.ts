@@ -14,7 +14,7 @@ export interface PairOrbits {
  * The orbits of the group on unordered pairs, numbered in the order of their smallest pair.
  * Cost: degree² + orbits × group order.
  *
- * Checked by: test/core/design/catalogue/orbit-search.test.ts
+ * Checked by: test/core/design/catalogue/orbits/orbit-search.test.ts
  */
 export function pairOrbits(group: PermutationGroup): PairOrbits {
   const t = group.degree;
