@@ -238,6 +238,7 @@ export const layers: typeof en = {
     adopted: 'Die Belegung wurde dem Plan hinzugefügt. Sie steht am Prüfstand am Ende der Ladereihenfolge.',
     reason: 'Begründung des Nachtrags',
     reasonDefault: (what) => `Reparatur nach verworfenen Läufen: ${what}`,
+    failed: (tag) => `Der Nachtrag wurde nicht festgehalten (${tag}). Nichts wurde verändert; noch einmal versuchen.`,
     confirm: 'Die Belegung dem Plan hinzufügen',
     back: 'Jetzt nicht',
     specimens: 'Probencodes',

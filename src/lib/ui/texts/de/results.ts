@@ -7,6 +7,10 @@ export const results: typeof en = {
   waitingFor: (seconds) =>
     `Es wird gerechnet, bisher ${seconds} s. Sie können weiterarbeiten; der Bildschirm bleibt frei.`,
   stages: {
+    design: 'Zählen, was vom Plan geblieben ist',
+    limits: 'Messwerte an der Grenze berücksichtigen',
+    ranks: 'Ränge',
+    answer: 'Die Antwort',
     start: 'Die Aufzeichnung lesen',
     fixed: 'Für Belegungen bereinigen',
     random: 'Die Varianz der Belegungen schätzen',

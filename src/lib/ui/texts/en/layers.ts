@@ -232,6 +232,7 @@ export const layers = {
     adopted: 'The session was added to the plan. It stands at the end of the loading order on the bench.',
     reason: 'Reason for the amendment',
     reasonDefault: (what: string) => `Repair after ruined runs: ${what}`,
+    failed: (tag: string) => `The amendment was not recorded (${tag}). Nothing was changed; try again.`,
     confirm: 'Add the session to the plan',
     back: 'Not now',
     specimens: 'Specimen codes',

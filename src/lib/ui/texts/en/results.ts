@@ -6,6 +6,10 @@ export const results = {
   waiting: 'Computing …',
   waitingFor: (seconds: string) => `Computing, ${seconds} s so far. You may go on working; the screen stays free.`,
   stages: {
+    design: 'Counting what is left of the design',
+    limits: 'Allowing for readings at a limit',
+    ranks: 'Ranks',
+    answer: 'The answer',
     start: 'Reading the record',
     fixed: 'Adjusting for sessions',
     random: 'Estimating the session variance',
