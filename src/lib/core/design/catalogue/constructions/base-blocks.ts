@@ -11,7 +11,7 @@ interface Entry {
   lambda: number;
   group: () => PermutationGroup;
   base: readonly BaseBlock[];
-  /** Who proved that the design exists. */
+  /** Who is known to have found such a design first, or listed them all; cited from memory. */
   source: string;
 }
 
