@@ -14,6 +14,9 @@ export const shell: typeof en = {
   },
   help: 'Hilfe',
   device: 'Dieses Gerät',
+  trouble:
+    'Die Aufzeichnungen auf diesem Gerät brauchen einen Blick: etwas fehlt oder lässt sich nicht öffnen. Nichts wurde überschrieben.',
+  toRecovery: 'Jetzt ansehen',
   language: 'Sprache',
   light: { label: 'Licht', auto: 'wie das Gerät', light: 'hell', dark: 'dunkel' },
   demo: 'erfundene Beispieldaten',

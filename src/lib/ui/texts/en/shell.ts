@@ -5,6 +5,9 @@ export const shell = {
   nav: { plan: 'Plan', bench: 'Bench', shift: 'Shift end', desk: 'Bring in', results: 'Results', record: 'Record' },
   help: 'Help',
   device: 'This device',
+  trouble:
+    'The records on this device need a look: something is missing or cannot be opened. Nothing has been overwritten.',
+  toRecovery: 'Look now',
   language: 'Language',
   light: { label: 'Light', auto: 'as the device', light: 'bright', dark: 'dark' },
   demo: 'invented demo data',
