@@ -1,0 +1,149 @@
+import { spawnSync } from 'node:child_process';
+import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { afterAll, describe, expect, test } from 'vitest';
+import type { Analysis } from '#lib/core/analysis/analysis-result.ts';
+import { makeEvent, type Head } from '#lib/core/campaign/make-event.ts';
+import { noHash } from '#lib/core/campaign/seal.ts';
+import { writeCampaignFile } from '#lib/core/exchange/campaign-file.ts';
+import { demoActs } from '#lib/state/demo/demo-acts.ts';
+import { readingsFromCsv, type AnalysisChoices } from '../../src/cli/readings-csv.ts';
+
+const folder = mkdtempSync(join(tmpdir(), 'evenload-'));
+afterAll(() => rmSync(folder, { recursive: true }));
+
+interface Printed {
+  analyses: { measurand: string | null; treatments: { name: string }[]; result: Analysis }[];
+  error?: { tag: string };
+}
+
+function run(name: string, text: string, ...options: string[]): { status: number | null; printed: Printed } {
+  const file = join(folder, name);
+  writeFileSync(file, text);
+  const { status, stdout } = spawnSync('node_modules/.bin/tsx', ['src/cli/analyse.ts', file, ...options], {
+    encoding: 'utf8',
+    maxBuffer: 1e8
+  });
+  return { status, printed: JSON.parse(stdout) as Printed };
+}
+
+/** D. C. Montgomery's catalyst example as a table. */
+function catalyst(): string {
+  const file = JSON.parse(readFileSync('test/reference/cases/pub_catalyst.json', 'utf8')) as {
+    data: { treatment: string[]; block: string[]; position: number[]; y: number[] };
+  };
+  const { treatment, block, position, y } = file.data;
+  return ['treatment,session,slot,y', ...y.map((v, i) => `${treatment[i]},${block[i]},${position[i]},${v}`)].join('\n');
+}
+
+/** The demo campaign as a file. */
+function demoFile(): string {
+  const uuid = (last: string): string => `019aa000-0000-7000-8000-${last.padStart(12, '0')}`;
+  let head: Head = { campaign: uuid('1'), device: uuid('2'), seq: 0, hash: noHash, tick: 0 };
+  const acts = demoActs();
+  const events = acts.map(({ at, ...act }, i) => {
+    const random = Uint8Array.from({ length: 10 }, (_, byte) => (byte < 8 ? 1 : byte === 8 ? i >> 8 : i & 255));
+    const moment = { now: at, offset: 0, mono: at - (acts[0]?.at ?? 0), run: 'demo', app: 'test', random };
+    const made = makeEvent(act as never, head, moment);
+    if (!made.ok) throw new Error(JSON.stringify(made.error));
+    head = made.value.head;
+    return made.value.event;
+  });
+  const maker = { campaign: uuid('1'), title: 'demo', device: uuid('2'), at: '2026-01-01T00:00:00Z', app: 'test' };
+  return writeCampaignFile(events, maker);
+}
+
+/** Each starts a program and compiles it; on a busy machine that takes its time. */
+const PATIENCE = 120_000;
+
+describe('npm run analyse', () => {
+  test(
+    'analyse readings.csv prints the published adjusted means of the catalyst example',
+    () => {
+      const { status, printed } = run('readings.csv', catalyst(), '--control', '4');
+      expect(status).toBe(0);
+      const { treatments, result } = printed.analyses[0]!;
+      if (!result.fixed.ok) throw new Error(result.fixed.error.tag);
+      const means = result.fixed.value.means.map(({ treatment, estimate }) => [treatments[treatment]!.name, estimate!]);
+      expect(Object.fromEntries(means)).toEqual({
+        1: expect.closeTo(71.375, 9),
+        2: expect.closeTo(71.625, 9),
+        3: expect.closeTo(72, 9),
+        4: expect.closeTo(75, 9)
+      });
+      expect(result.comparisons.fixed.ok && result.comparisons.fixed.value.control.ok).toBe(true);
+    },
+    PATIENCE
+  );
+
+  test(
+    'analyse campaign.file prints an analysis of every measurand of the demo',
+    () => {
+      const { status, printed } = run('demo.evenload', demoFile());
+      expect(status).toBe(0);
+      expect(printed.analyses.length).toBeGreaterThan(0);
+      const { treatments, result } = printed.analyses[0]!;
+      expect(treatments).toHaveLength(9);
+      expect(result.counts.ruined).toBe(1);
+      expect(result.fixed.ok).toBe(true);
+    },
+    PATIENCE
+  );
+
+  test(
+    'analyse prints the fault and ends with status 2 where a file cannot be analysed',
+    () => {
+      expect(run('empty.csv', 'treatment,session,y\nA,1,\nB,1,')).toMatchObject({
+        status: 2,
+        printed: { error: { tag: 'no-readings' } }
+      });
+      expect(run('noise.bin', '%PDF-1.4 …')).toMatchObject({ status: 2 });
+      expect(run('readings.csv', catalyst(), '--alpha', '2')).toMatchObject({
+        status: 2,
+        printed: { error: { tag: 'bad-alpha' } }
+      });
+    },
+    PATIENCE
+  );
+});
+
+describe('readingsFromCsv', () => {
+  const choices: AnalysisChoices = {
+    alpha: 0.05,
+    control: null,
+    direction: 'lower',
+    primary: 'fixed',
+    margin: null,
+    seed: 1,
+    slots: false,
+    kind: 'number'
+  };
+
+  test('readingsFromCsv reads limits, ruined runs, slots, machines and covariates', () => {
+    const read = readingsFromCsv(
+      'Treatment;Session;Slot;Y;Ruined;Machine;Covariate\nA;1;1;≥ 10000;;M1;2,5\nB;1;2;12,5;yes;M2;3\nA;2;1;;;M1;',
+      choices
+    );
+    if (!read.ok) throw new Error(read.error.tag);
+    expect(read.value.rows).toMatchObject([
+      { treatment: 0, session: 0, slot: 0, y: 10000, limit: 'at-least', ruined: false, machine: 'M1', covariate: 2.5 },
+      { treatment: 1, session: 0, slot: 1, y: 12.5, limit: 'none', ruined: true, covariate: 3 },
+      { treatment: 0, session: 1, slot: 0, y: null }
+    ]);
+  });
+
+  test.each([
+    ['treatment,session\nA,1', { tag: 'no-column', column: 'y' }],
+    ['treatment,session,y\nA,1,about 3', { tag: 'not-a-number', line: 2, column: 'y', found: 'about 3' }],
+    ['treatment,session,slot,y\nA,1,left,3', { tag: 'not-a-number', column: 'slot', found: 'left' }],
+    ['', { tag: 'unreadable-table' }]
+  ])('readingsFromCsv(%j) says what is wrong', (text, error) => {
+    expect(readingsFromCsv(text, choices)).toMatchObject({ ok: false, error });
+  });
+
+  test('readingsFromCsv names the treatments when the control is none of them', () => {
+    const read = readingsFromCsv('treatment,session,y\nA,1,3', { ...choices, control: 'Z' });
+    expect(read).toEqual({ ok: false, error: { tag: 'unknown-control', name: 'Z', known: ['A'] } });
+  });
+});
