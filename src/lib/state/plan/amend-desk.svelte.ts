@@ -1,3 +1,4 @@
+import { untrack } from 'svelte';
 import { draftFromPlan } from '#lib/core/campaign/draft/draft-from-plan.ts';
 import type { DraftFault } from '#lib/core/campaign/draft/draft-fault.ts';
 import type { PlanDraft } from '#lib/core/campaign/draft/plan-draft.ts';
@@ -48,12 +49,10 @@ export class AmendDesk {
   /** Keeps the formulas up with the fields. Call while a component is made. */
   follow(): void {
     $effect(() => {
-      if (this.draft && this.#read) {
-        this.formulas.look(
-          this.#read.plan,
-          this.draft.measurands.map(({ key }) => key)
-        );
-      }
+      if (!this.draft || !this.#read) return;
+      const { plan } = this.#read;
+      const keys = this.draft.measurands.map(({ key }) => key);
+      untrack(() => this.formulas.look(plan, keys));
     });
   }
 

@@ -19,6 +19,7 @@ export class DesignSearch {
   #error = $state.raw<ProposeError | null>(null);
   #status = $state<'idle' | 'running' | 'done' | 'cancelled' | 'failed'>('idle');
   #done = $state(0);
+  #treatments = $state(0);
   #question = '';
   #timer: ReturnType<typeof setTimeout> | undefined;
   #running: AbortController | null = null;
@@ -38,6 +39,10 @@ export class DesignSearch {
   get status() {
     return this.#status;
   }
+  /** How many treatments the choices are for. */
+  get treatments() {
+    return this.#treatments;
+  }
   /** 0 … 1 */
   get done() {
     return this.#done;
@@ -54,6 +59,7 @@ export class DesignSearch {
     this.#smallestBalanced = null;
     this.#error = null;
     this.#done = 0;
+    this.#treatments = request?.treatments ?? 0;
     this.#status = request === null ? 'idle' : 'running';
     if (request !== null) this.#timer = setTimeout(() => void this.#run(request), pause);
     return true;

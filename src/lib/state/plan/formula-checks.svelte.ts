@@ -20,6 +20,7 @@ export class FormulaChecks {
   #checks = $state.raw<Record<string, FormulaCheck>>({});
   #compiled: Record<string, CompiledFormula> = {};
   #asked: Record<string, string> = {};
+  #pending = $state(0);
 
   /** By key of the measurand in the draft. */
   get all(): Record<string, FormulaCheck> {
@@ -27,7 +28,7 @@ export class FormulaChecks {
   }
 
   get faulty(): boolean {
-    return Object.values(this.#checks).some(({ tag }) => tag === 'faulty' || tag === 'checking');
+    return this.#pending > 0 || Object.values(this.#checks).some(({ tag }) => tag === 'faulty' || tag === 'checking');
   }
 
   /** Place of the first faulty formula among the measurands; 0 when there is none. */
@@ -49,8 +50,11 @@ export class FormulaChecks {
       const question = JSON.stringify([formula, unit, names]);
       asked[key] = question;
       if (this.#asked[key] === question) return;
-      if (this.#checks[key]?.tag !== 'faulty') this.#say(key, { tag: 'checking' });
+      // What is known stays in sight until the answer is there.
+      if (!this.#checks[key] || this.#checks[key].tag === 'none') this.#say(key, { tag: 'checking' });
+      this.#pending++;
       void compileMeasurand(measurand, plan).then((compiled) => {
+        this.#pending--;
         if (this.#asked[key] !== question) return;
         if (!compiled.ok) {
           delete this.#compiled[key];

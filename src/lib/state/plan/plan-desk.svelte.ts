@@ -44,7 +44,9 @@ export class PlanDesk {
     designRequest(this.draft, this.read.plan, this.#numbers(), this.#longer ? 'thorough' : 'normal')
   );
   readonly chosen = $derived.by(() => {
-    const { choices, recommended } = this.search;
+    const { choices, recommended, treatments } = this.search;
+    // Between a change and the next search the choices are for another number of treatments.
+    if (treatments !== this.read.plan.treatments.length) return null;
     const byHand = choices.find(({ id }) => id === this.draft.design.chosen);
     return byHand ?? choices.find(({ id }) => id === recommended?.id) ?? choices[0] ?? null;
   });
@@ -97,12 +99,11 @@ export class PlanDesk {
       if (!first) this.store.keep(draft);
       first = false;
     });
-    $effect(() =>
-      this.formulas.look(
-        this.read.plan,
-        this.draft.measurands.map(({ key }) => key)
-      )
-    );
+    $effect(() => {
+      const { plan } = this.read;
+      const keys = this.draft.measurands.map(({ key }) => key);
+      untrack(() => this.formulas.look(plan, keys));
+    });
     $effect(() => {
       const request = this.#request;
       untrack(() => {
