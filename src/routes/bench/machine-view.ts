@@ -92,7 +92,7 @@ export function valuesOf(plan: Plan, run: RunState, focus: Focus): ValueView[] {
 
 function markOf(state: ReadingState | undefined, here: boolean, writing: boolean): ValueView['mark'] {
   if (state?.contradiction) return 'contradiction';
-  if (state?.current) return state.current.raised.length > 0 ? 'kept' : 'saved';
+  if (state?.current) return state.current.raised.length > 0 && state.current.because !== null ? 'kept' : 'saved';
   if (state?.missing) return 'missing';
   if (here) return writing ? 'writing' : 'due';
   return 'later';

@@ -66,7 +66,6 @@ export const bench: typeof en = {
     label: (label, slot, code) => `${label}, ${platz(slot)}, Probe ${code}`,
     understood: (value) => `Verstanden: ${value}`,
     empty: 'Messwert tippen, dann Eingabe.',
-    ready: 'Bereit zum Start.',
     keypad: 'Tastenfeld',
     backspace: 'Letztes Zeichen löschen',
     clear: 'Leeren',
@@ -153,6 +152,7 @@ export const bench: typeof en = {
   },
 
   run: {
+    ready: 'bereit zum Start',
     elapsed: 'läuft seit',
     left: 'noch zu laufen',
     over: 'überzogen um',

@@ -69,7 +69,6 @@ export const bench = {
     label: (label: string, slot: string, code: string) => `${label}, ${place(slot)}, specimen ${code}`,
     understood: (value: string) => `Understood: ${value}`,
     empty: 'Type the reading, then Enter.',
-    ready: 'Ready to start.',
     keypad: 'Keypad',
     backspace: 'Delete the last character',
     clear: 'Clear',
@@ -157,6 +156,7 @@ export const bench = {
   },
 
   run: {
+    ready: 'ready to start',
     elapsed: 'running for',
     left: 'still to run',
     over: 'over by',
