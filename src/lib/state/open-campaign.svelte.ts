@@ -16,7 +16,7 @@ import { append, load } from '#lib/storage/journal.ts';
 import { tellOthers, whenOthersWrite } from './channel.ts';
 import { connection } from './database.svelte.ts';
 import { device } from './device.svelte.ts';
-import { type ExportedFile, type ExportFault, fileOf, makeExport } from './make-export.ts';
+import type { ExportedFile, ExportFault } from './make-export.ts';
 import { stampNow } from './surroundings.ts';
 import { type Role, WriterLock } from './writer-lock.ts';
 
@@ -158,7 +158,8 @@ export class OpenCampaign {
    * A file of everything this tab holds, unwritten acts too, made without the database: the way out when it writes no
    * more.
    */
-  rescueFile(): Promise<Result<ExportedFile, ExportFault>> {
+  async rescueFile(): Promise<Result<ExportedFile, ExportFault>> {
+    const { fileOf } = await import('./make-export.ts');
     return fileOf([...this.#events, ...this.#unsaved], this.id, this.#state.title);
   }
 
@@ -203,7 +204,10 @@ export class OpenCampaign {
 
   /** Makes the campaign file and reads it back; nothing is called exported before that holds. */
   exportFile(): Promise<Result<ExportedFile, ExportFault>> {
-    return this.#inTurn(() => makeExport(this.id, this.#state.title));
+    return this.#inTurn(async () => {
+      const { makeExport } = await import('./make-export.ts');
+      return makeExport(this.id, this.#state.title);
+    });
   }
 
   /** Says that a file made by `exportFile` has left the device: shared, saved or downloaded. */
@@ -219,6 +223,8 @@ export class OpenCampaign {
 
   /** Finds the first role of this tab. */
   async start(): Promise<this> {
+    // Held in memory before anything goes wrong: a rescue must not need to load its own program.
+    void import('./make-export.ts').catch(() => undefined);
     this.#role = await this.#lock.start();
     document.addEventListener('visibilitychange', this.#woken);
     return this;

@@ -1,11 +1,11 @@
 import type { LoadVerdict } from '#lib/core/campaign/checks/check-load.ts';
 import type { LoadPlace } from '#lib/state/bench/loading.svelte.ts';
 import type { LoadWarningView } from '#lib/ui/bench/view.ts';
-import { benchTexts } from '#lib/ui/texts/bench.ts';
+import { benchPartTexts } from '#lib/ui/texts/bench-parts.ts';
 
 /** What to say about a code that is not the planned one, and which ways on there are. */
 export function loadWarning(verdict: LoadVerdict, place: LoadPlace, nameOf: (slot: number) => string): LoadWarningView {
-  const t = benchTexts().load;
+  const t = benchPartTexts().load;
   const { code } = verdict;
   const here = nameOf(place.slot);
   const base = { code, putThere: null, moveHere: false, really: false, spare: false };

@@ -90,7 +90,7 @@ export function actOf({ bench, nameOf, over, following, faulty }: At): Act | nul
   if (following) return act('take-over', t.act.takeOver, { disabled: false });
   if (faulty) return act('retry', t.act.retry);
   if (entry.doubt) return act('again', t.act.again, { focus: false, calm: true });
-  if (loading.verdict) return act('aside', t.load.aside(toLoad?.specimen ?? ''), { focus: false, calm: true });
+  if (loading.verdict) return act('aside', t.aside(toLoad?.specimen ?? ''), { focus: false, calm: true });
   const enter = () => {
     const label = entry.understood
       ? t.act.enterValue(quantityAsTyped(entry.understood, unitText(place?.definition.unit ?? '')))

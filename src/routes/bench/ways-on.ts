@@ -3,11 +3,11 @@ import type { CampaignState } from '#lib/core/campaign/state.ts';
 import { repeatSession } from '#lib/core/campaign/steps/repeat-session.ts';
 import { unusedSpares } from '#lib/core/campaign/steps/unused-spares.ts';
 import type { WayOnView } from '#lib/ui/bench/view.ts';
-import { benchTexts } from '#lib/ui/texts/bench.ts';
+import { benchPartTexts } from '#lib/ui/texts/bench-parts.ts';
 
 /** The three ways on after ruin, and which of them there are specimens for. */
 export function waysOn(state: CampaignState, session: string, slot: number | null): WayOnView[] {
-  const t = benchTexts().ruin;
+  const t = benchPartTexts().ruin;
   const ruined = state.sessions.find(({ id }) => id === session);
   const run = ruined?.runs.find((one) => one.slot === slot);
   const spare = run ? unusedSpares(state, run.planned.treatment)[0] : undefined;

@@ -1,11 +1,10 @@
 import type { Finding } from '#lib/core/campaign/checks/finding.ts';
-import type { ReadingNotUnderstood, UnderstoodReading } from '#lib/core/campaign/parse-reading.ts';
+import type { UnderstoodReading } from '#lib/core/campaign/parse-reading.ts';
 import type { Plan, Range } from '#lib/core/campaign/plan.ts';
 import type { BenchWords } from '#lib/state/bench/bench-words.ts';
 import { writtenPlain, writtenValue } from '#lib/ui/format/reading-text.ts';
 import { unitText } from '#lib/ui/format/unit-text.ts';
 import { writer } from '#lib/ui/format/writer.svelte.ts';
-import { benchTexts } from '#lib/ui/texts/bench.ts';
 import { findingTexts } from '#lib/ui/texts/findings.ts';
 
 interface Quantity {
@@ -76,29 +75,6 @@ export function benchWords(plan: () => Plan | null): BenchWords {
       findingTexts().slipTaken(typed, quantity(taken, { unit: unitText(unit), decimals: 0 })),
     condition: (finding, condition) => findingText(finding, conditionQuantity(condition.unit), plan())
   };
-}
-
-/** Why a text was not taken as a number. */
-export function problemText(problem: ReadingNotUnderstood): string {
-  const t = benchTexts().problem;
-  switch (problem.tag) {
-    case 'empty':
-      return t.empty;
-    case 'not-a-number':
-      return t.notANumber(problem.at);
-    case 'ambiguous':
-      return t.ambiguous;
-    case 'unfinished':
-      return t.unfinished;
-    case 'other-unit':
-      return t.otherUnit(problem.typed, problem.unit);
-    case 'limit-not-allowed':
-      return t.limitNotAllowed;
-    case 'too-many-digits':
-      return t.tooManyDigits;
-    case 'too-large-or-small':
-      return t.tooLargeOrSmall;
-  }
 }
 
 /** `mm:ss`, or `h:mm:ss` from an hour on. */
