@@ -1,5 +1,3 @@
-import { inSentence } from '../../format/unit-text.ts';
-
 /** A short name is only a number; a long one says itself what it is. */
 const place = (name: string) => (name.length <= 3 ? `slot ${name}` : name);
 const Place = (name: string) => (name.length <= 3 ? `Slot ${name}` : name);
