@@ -9,10 +9,10 @@ test('record: the demo opens as a list of events with who, when, what, and says 
   await page.waitForURL(/c=/);
   const id = new URL(page.url()).searchParams.get('c') ?? '';
   await page.goto(`${app.origin}/record?c=${id}`);
-  await expect(page.getByRole('heading', { name: 'Record' })).toBeVisible();
+  await expect(page.getByRole('heading', { name: 'Record', exact: true })).toBeVisible();
   await expect(page.getByText('Reading recorded').first()).toBeVisible();
   await page.getByLabel('Show').selectOption('changes');
-  await expect(page.getByText('Ruined').first()).toBeVisible();
+  await expect(page.getByRole('cell', { name: /^Ruined/ }).first()).toBeVisible();
   await expectAccessible(page);
 });
 
