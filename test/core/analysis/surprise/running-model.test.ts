@@ -181,12 +181,24 @@ test('fitRunningModel(readings).predict does not depend on order, numbering, and
   );
 });
 
-test('fitRunningModel(readings).predict is silent with few readings, unseen treatments and no scatter', () => {
+test('fitRunningModel(readings).predict is silent with few readings and no scatter', () => {
   const readings = campaign('silence', (y) => y);
-  expect(fitRunningModel(readings.slice(0, 9)).predict(0, 3, 0.01)).toBeNull();
+  expect(fitRunningModel(readings.slice(0, 5)).predict(0, 3, 0.01)).toBeNull();
   expect(fitRunningModel([]).predict(0, 0, 0.01)).toBeNull();
-  expect(fitRunningModel(readings).predict(99, 0, 0.01)).toBeNull();
   expect(fitRunningModel(readings.map((r) => ({ ...r, y: 5 }))).predict(0, 8, 0.01)).toBeNull();
+});
+
+test('fitRunningModel(readings).predict speaks widely from all readings while a treatment has said nothing', () => {
+  const readings = campaign('pooled', (y) => y);
+  const seen = fitRunningModel(readings).predict(0, 6, 0.01)!;
+  const unseen = fitRunningModel(readings).predict(99, 6, 0.01)!;
+  expect([seen.basis, unseen.basis]).toEqual(['treatment', 'all']);
+  expect(unseen.high - unseen.low).toBeGreaterThan(seen.high - seen.low);
+  const early = fitRunningModel(readings.slice(0, 7)).predict(3, 2, 0.01)!;
+  expect(early.basis).toBe('all');
+  // Good readings are near 55: neither ten times nor a tenth of one lies inside.
+  expect(early.low).toBeGreaterThan(5.5);
+  expect(early.high).toBeLessThan(550);
 });
 
 test('fitRunningModel(readings).predict gives the chance alpha at its own ends', () => {
