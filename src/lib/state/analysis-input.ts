@@ -19,7 +19,7 @@ function seedOf(id: string): number {
 /**
  * Returns what the analysis of a measurand reads: the runs of the record with their values, and what the plan fixed.
  * A run whose treatment is not known (a contradiction waits for a decision) is left out until it is.
- * Checked by: test/state/analysis-input.test.ts
+ * Checked by: test/core/exchange/package/make-package.test.ts (through a whole package)
  */
 export function analysisInput(
   state: CampaignState,

@@ -34,7 +34,6 @@ const MOST_TREATMENTS = 120;
 /**
  * Returns what ruin has cost and the ways on: closed sessions count with what is left of them, sessions still to come as planned.
  * Null when nothing is lost, or where the campaign is too large to work it out at once.
- * Checked by: test/state/repair.test.ts
  */
 export function repairFacts(state: CampaignState, input: Observations, analysis: Analysis): RepairFacts | null {
   const t = input.treatments.length;

@@ -10,7 +10,6 @@ import { heading, type ReportContext } from './report-context.ts';
 /**
  * Returns the report: the first page answers, the rest shows why. Without any result it still holds plan, loading order, readings
  * and provenance.
- * Checked by: test/ui/report/report-content.test.ts
  */
 export function reportContent(context: ReportContext): ReportDocument {
   const { campaign, report: t, views, write } = context;

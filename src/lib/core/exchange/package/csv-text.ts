@@ -22,7 +22,7 @@ function cellText(cell: Cell): string {
 /**
  * Returns the table as comma-separated text with a header line and CRLF ends; numbers with a point and all their digits.
  * Source: RFC 4180.
- * Checked by: test/core/exchange/package/csv-text.test.ts
+ * Checked by: test/core/exchange/package/make-package.test.ts
  */
 export function csvText(table: Pick<Table, 'fields' | 'rows'>): string {
   const lines = [table.fields.map((field) => cellText(field.name)).join(',')];

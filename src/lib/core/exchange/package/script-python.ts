@@ -1,6 +1,6 @@
 /**
  * The Python script of the package: reads the runs and refits the model with sessions fixed by least squares (numpy only).
- * Checked by: test/core/exchange/package/script-python.test.ts (run with Python where it and numpy are installed)
+ * Checked by: test/core/exchange/package/make-package.test.ts (run with Python where it and numpy are installed)
  */
 export const scriptPython = `"""Reads this data package, fits the model with sessions fixed again and compares with results/means.csv.
 

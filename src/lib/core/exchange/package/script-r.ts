@@ -1,7 +1,7 @@
 /**
  * The R script of the package: reads the runs, refits both models with base R and lme4, and compares with the results.
  * Sum-to-zero contrasts of the sessions make the intercept plus a treatment's coefficient the mean over sessions of equal weight.
- * Checked by: test/core/exchange/package/script-r.test.ts (run with R where it is installed)
+ * Checked by: test/core/exchange/package/make-package.test.ts (run with R where it is installed)
  */
 export const scriptR = `# Reads this data package, fits the models again and compares with results/means.csv.
 # Run it in the folder of the package:  Rscript refit.R

@@ -72,7 +72,7 @@ function split(text: string, delimiter: string): { rows: string[][]; lines: numb
  * Returns the cells of a text table; the delimiter is the one that gives most lines the same number of cells. Quotes, line
  * ends inside quotes and a byte-order mark are understood, blank lines are left out.
  * Source: RFC 4180, widened to semicolon, tabulator and bar.
- * Checked by: test/core/exchange/readings-table/read-delimited.test.ts
+ * Checked by: test/core/exchange/readings-table/readings-table.test.ts
  */
 export function readDelimited(raw: string): Result<DelimitedTable, DelimitedFault> {
   const text = raw.replace(/^\uFEFF/, '').replaceAll('\0', '');
