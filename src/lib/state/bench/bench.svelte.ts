@@ -8,7 +8,7 @@ import { Conditions } from './conditions.svelte.ts';
 import { Loading } from './loading.svelte.ts';
 import { ReadingEntry, type EntryPlace } from './reading-entry.svelte.ts';
 import type { BenchWords } from './bench-words.ts';
-import { checksFor } from './reading-checks.ts';
+import { allChecksFor } from './reading-checks.ts';
 import { unusedSpares } from '#lib/core/campaign/steps/unused-spares.ts';
 
 /**
@@ -35,9 +35,7 @@ export class Bench {
     this.#operator = operator;
     this.conditions = new Conditions(book, words.condition);
     this.loading = new Loading(book, isWellFormed);
-    this.entry = new ReadingEntry(book, words, (place, understood) =>
-      Promise.resolve(checksFor(book.state, place, understood))
-    );
+    this.entry = new ReadingEntry(book, words, (place, understood) => allChecksFor(book.state, place, understood));
   }
 
   get plan(): Plan | null {

@@ -6,8 +6,28 @@ import type { UnderstoodReading } from '#lib/core/campaign/parse-reading.ts';
 import type { CampaignState } from '#lib/core/campaign/state.ts';
 import type { EntryPlace } from './reading-entry.svelte.ts';
 
+/**
+ * What all checks say about a value. The model behind the surprise check is loaded when first needed; where it cannot be,
+ * the other checks speak without it: a check never stands between a reading and the record.
+ */
+export async function allChecksFor(
+  state: CampaignState,
+  place: EntryPlace,
+  understood: UnderstoodReading
+): Promise<Finding[]> {
+  const findings = checksFor(state, place, understood);
+  const surprises = await import('./surprise-findings.ts').then(
+    ({ surpriseFindings }) => surpriseFindings(state, place, understood),
+    () => []
+  );
+  const known = new Set(findings.map(({ check }) => check));
+  // A value outside its limits is named as that; a slip is offered once.
+  if (known.has('impossible') || known.has('unexpected')) return findings;
+  return [...findings, ...surprises];
+}
+
 /** What the checks that need no model say about a value. */
-export function checksFor(state: CampaignState, place: EntryPlace, understood: UnderstoodReading): Finding[] {
+function checksFor(state: CampaignState, place: EntryPlace, understood: UnderstoodReading): Finding[] {
   const { definition } = place;
   const { value, plain, limit } = understood;
   const findings: Finding[] = [];
