@@ -53,3 +53,12 @@ test('demoActs contradicts nothing and raises no flag on its own record', () => 
 test('demoActs makes the same acts every time', () => {
   expect(demoActs()).toEqual(demoActs());
 });
+
+test('demoActs gives every shift each treatment once', () => {
+  const sessions = state.issued?.sessions ?? [];
+  const shifts = [1, 2, 3, 4].map((shift) => sessions.filter((session) => session.shift === shift));
+  for (const shift of shifts) {
+    const treatments = shift.flatMap(({ slots }) => slots.map((slot) => slot?.treatment));
+    expect([...treatments].sort()).toEqual(state.plan?.treatments.map(({ id }) => id));
+  }
+});

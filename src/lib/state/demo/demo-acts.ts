@@ -45,7 +45,7 @@ const handOver = (shift: number): string =>
   shift === 2 ? 'Pads of batch P-32 run out; batch P-33 is on the shelf.' : '';
 
 function issueDemo(): IssuedPlan {
-  const answer = balancedDesign(9, 3, 4);
+  const answer = balancedDesign(9, 3, 4, { resolvable: true });
   if (answer.status !== 'exists') throw new Error('demo: the affine plane of order 3 is missing');
   const { blocks, construction, source, resolution } = answer.design;
   const groupOf = blocks.map((_, block) => (resolution ?? []).findIndex((group) => group.includes(block)));
