@@ -59,7 +59,7 @@ test('the published catalyst example, planned, recorded session by session and a
     await expect(page.getByRole('heading', { level: 1 })).toContainText('Before loading');
     await act.click();
     for (let slot = 0; slot < 3; slot++) {
-      await expect(act).toContainText('is in');
+      await expect(act).toContainText(`is in slot ${slot + 1}`);
       await act.click();
     }
     await expect(act).toContainText('Start');
@@ -80,6 +80,8 @@ test('the published catalyst example, planned, recorded session by session and a
   await page.getByRole('link', { name: 'Results' }).first().click();
   const content = page.locator('#content');
   for (const mean of ['71.375', '71.625', '72.000', '75.000']) await expect(content).toContainText(mean);
-  await expect(content).toContainText('22.75');
-  await expect(content).toContainText('11.67');
+  await content.getByText('Scatter and efficiency').click();
+  for (const figure of ['22.75', '3.25', '11.67']) await expect(content).toContainText(figure);
+  await content.getByText('Workings', { exact: true }).click();
+  await expect(content).toContainText('The effects add to 0');
 });

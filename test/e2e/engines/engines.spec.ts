@@ -1,7 +1,7 @@
 import { expect, test } from '@playwright/test';
 import { listen, serveFolder } from '../../../src/cli/serve.mjs';
 import { startChromium } from './chromium.ts';
-import { visible, waitFor, type Driver } from './driver.ts';
+import { textOf, visible, waitFor, type Driver } from './driver.ts';
 import { startFirefox } from './firefox.ts';
 import { startWebKit } from './webkit.ts';
 
@@ -24,12 +24,21 @@ async function press(driver: Driver, text: string, within = ''): Promise<void> {
   await driver.click('[data-pressed]');
 }
 
-const says = (driver: Driver, sentence: string): Promise<void> =>
-  waitFor(
-    driver,
-    `“${sentence}”`,
-    `return document.querySelector('#content h1')?.textContent.includes(${JSON.stringify(sentence)})`
-  );
+/** Waits until the one sentence at the top says so; tells what it said instead. */
+async function says(driver: Driver, sentence: string): Promise<void> {
+  const heading = '#content h1';
+  try {
+    await waitFor(
+      driver,
+      sentence,
+      `return document.querySelector('${heading}')?.textContent.includes(${JSON.stringify(sentence)})`
+    );
+  } catch (cause) {
+    throw new Error(`${driver.engine}: the screen says “${await textOf(driver, heading)}”, not “${sentence}”`, {
+      cause
+    });
+  }
+}
 
 /** Types one reading and Enter, and waits until it is said to be saved: the next reading is due. */
 async function enter(driver: Driver, value: string, next: string): Promise<void> {
@@ -81,18 +90,18 @@ for (const [name, start] of engines) {
       await driver.click('dialog button[type=submit]');
 
       await press(driver, 'Precautions read', 'div.act');
-      for (let slot = 1; slot <= 3; slot++) await press(driver, `is in`, 'div.act');
-      await says(driver, 'Track 1: enter Panel mass before');
+      for (let slot = 1; slot <= 3; slot++) await press(driver, `is in Track ${slot}`, 'div.act');
+      await says(driver, 'Track 1: enter panel mass before');
       await enter(driver, '44.1000', 'Track 2: enter');
       await enter(driver, '43,2000', 'Track 3: enter');
       // In the middle of the job the program starts again.
       await driver.goto(`${origin}/bench?c=${campaign}`);
-      await says(driver, 'Track 3: enter Panel mass before');
+      await says(driver, 'Track 3: enter panel mass before');
       await enter(driver, '45.0000', 'All is loaded');
       await press(driver, 'Start', 'div.act');
       await press(driver, 'Stop early', 'div.act');
       await press(driver, 'Machine stopped by itself');
-      await says(driver, 'Track 1: enter Panel mass after');
+      await says(driver, 'Track 1: enter panel mass after');
       await enter(driver, '44.0640', 'Track 2: enter');
       await enter(driver, '43.1640', 'Track 3: enter');
       await enter(driver, '44.9640', 'Look over');
