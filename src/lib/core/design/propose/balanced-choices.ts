@@ -37,7 +37,8 @@ function choiceOf(request: DesignRequest, design: BalancedDesign): DesignChoice 
     [...design.blocks[j]!].sort((a, b) => a - b)
   );
   const groups = request.resolvable ? order.map((j) => groupOf[j]!) : null;
-  const kind = id === 'complete-blocks' ? 'complete' : id.startsWith('all-combinations') ? 'all-combinations' : 'catalogue';
+  const kind =
+    id === 'complete-blocks' ? 'complete' : id.startsWith('all-combinations') ? 'all-combinations' : 'catalogue';
   return makeChoice(request, `balanced-${design.b}`, blocks, groups, { kind, id, text, source, search: null });
 }
 
