@@ -81,3 +81,14 @@ test('allChecksFor(state, place, value) does not count a ruined run', async () =
   const findings = await allChecksFor(replay(spoilt.events), place(), typed('24'));
   expect(findings.map(({ check }) => check)).toContain('surprise');
 });
+
+test('allChecksFor(state, place, value) allows one digit where the readings so far differ by less', async () => {
+  const exact = recorded(11, plan, (session, slot) => {
+    // One reading a hundredth off: far less scatter than the last digit.
+    return 5 + blocks[session - 1]![slot]! + (session === 1 && slot === 0 ? 0.01 : 0);
+  });
+  const state = replay(exact.events);
+  const right = 5 + blocks[3]![2]!;
+  expect(await allChecksFor(state, place(), typed(String(right + 0.1)))).toEqual([]);
+  expect(await allChecksFor(state, place(), typed(String(right + 0.3)))).toMatchObject([{ check: 'surprise' }]);
+});

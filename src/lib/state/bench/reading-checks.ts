@@ -16,10 +16,9 @@ export async function allChecksFor(
   understood: UnderstoodReading
 ): Promise<Finding[]> {
   const findings = checksFor(state, place, understood);
-  const surprises = await import('./surprise-findings.ts').then(
-    ({ surpriseFindings }) => surpriseFindings(state, place, understood),
-    () => []
-  );
+  const surprises = await import('./surprise-findings.ts')
+    .then(({ surpriseFindings }) => surpriseFindings(state, place, understood))
+    .catch(() => []);
   const known = new Set(findings.map(({ check }) => check));
   // A value outside its limits is named as that; a slip is offered once.
   if (known.has('impossible') || known.has('unexpected')) return findings;

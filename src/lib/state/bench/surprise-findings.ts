@@ -1,5 +1,5 @@
-import { fitRunningModel, SURPRISE_CHANCE, type Prediction } from '#lib/core/analysis/surprise/running-model.ts';
-import { checkValue } from '#lib/core/campaign/checks/check-value.ts';
+import { fitRunningModel, SURPRISE_CHANCE } from '#lib/core/analysis/surprise/running-model.ts';
+import { checkValue, type Predicted } from '#lib/core/campaign/checks/check-value.ts';
 import type { Finding } from '#lib/core/campaign/checks/finding.ts';
 import { observationsOf, type ObservedRow } from '#lib/core/campaign/observations-of.ts';
 import type { UnderstoodReading } from '#lib/core/campaign/parse-reading.ts';
@@ -62,10 +62,18 @@ async function aboutMeasurand(
     SURPRISE_CHANCE
   );
   if (!prediction) return [];
-  const { low, high, center } = prediction;
+  // Readings that differ by less than their last digit leave no scatter to judge by: one digit is always allowed.
+  const digit = 10 ** -measurand.decimals;
+  const { center } = prediction;
+  const [low, high] = [prediction.low - digit, prediction.high + digit];
   const [surprise] = checkValue(here.y, String(here.y), everything, { low, high, center }, measurand.id);
   if (!surprise) return [];
-  const inReading = predictedReading(prediction, value, here.y, (typed) => ownRow(rowsWith(typed), place)?.y ?? null);
+  const inReading = predictedReading(
+    { low, high, center },
+    value,
+    here.y,
+    (typed) => ownRow(rowsWith(typed), place)?.y ?? null
+  );
   const limits = { possible: place.definition.possible, expected: place.definition.expected };
   const slip = inReading && checkValue(value, plain, limits, inReading, measurand.id).find((f) => f.check === 'slip');
   return slip ? [surprise, slip] : [surprise];
@@ -73,11 +81,11 @@ async function aboutMeasurand(
 
 /** The prediction as an interval of the reading, where the measurand moves with it in a straight line. */
 function predictedReading(
-  { low, high, center }: Prediction,
+  { low, high, center }: Predicted,
   value: number,
   y: number,
   at: (typed: number) => number | null
-): { low: number; high: number; center: number } | null {
+): Predicted | null {
   const step = Math.max(Math.abs(value), 1e-3) * 0.01;
   const moved = at(value + step);
   if (moved === null || moved === y) return null;
