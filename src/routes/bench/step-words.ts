@@ -83,11 +83,11 @@ export function actOf({ bench, nameOf, over, following, faulty }: At): Act | nul
     do: doing,
     label,
     focus: true,
-    disabled: bench.busy,
+    disabled: false,
     calm: false,
     ...more
   });
-  if (following) return act('take-over', t.act.takeOver, { disabled: false });
+  if (following) return act('take-over', t.act.takeOver);
   if (faulty) return act('retry', t.act.retry);
   if (entry.doubt) return act('again', t.act.again, { focus: false, calm: true });
   if (loading.verdict) return act('aside', t.aside(toLoad?.specimen ?? ''), { focus: false, calm: true });
@@ -95,12 +95,12 @@ export function actOf({ bench, nameOf, over, following, faulty }: At): Act | nul
     const label = entry.understood
       ? t.act.enterValue(quantityAsTyped(entry.understood, unitText(place?.definition.unit ?? '')))
       : t.act.enter;
-    return act('enter', label, { focus: false, disabled: bench.busy || entry.text === '' });
+    return act('enter', label, { focus: false, disabled: entry.text === '' });
   };
   switch (step.kind) {
     case 'prepare':
       return act('prepare', bench.conditions.list.length > 0 ? t.act.prepareConditions : t.act.prepare, {
-        disabled: bench.busy || !bench.conditions.ready,
+        disabled: !bench.conditions.ready,
         focus: bench.conditions.list.length === 0
       });
     case 'load':
