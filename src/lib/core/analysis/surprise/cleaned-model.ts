@@ -13,6 +13,8 @@ const MOST_SET_ASIDE = 4;
 /** Ratios over which the prediction is averaged, as natural logarithms. */
 const GRID = { from: -6, to: 18, step: 0.5 };
 const COARSE = 4;
+/** Where the likeliest ratio is looked for before readings are set aside. */
+const LOOK = { from: -4, to: 16, step: 2 };
 /** In the logarithm of the posterior. */
 const NEGLIGIBLE = 9;
 
@@ -31,10 +33,13 @@ export interface CleanedModel {
  */
 export function cleanedModel(readings: readonly RunningReading[], robust: boolean): CleanedModel {
   const setAside = new Set<number>();
+  let near: number | null = null;
   let table = sessionTable(readings, setAside);
   while (robust && setAside.size < MOST_SET_ASIDE && table.errorDf >= FEWEST_ERROR_DF) {
-    const odd = oddest(table);
+    const fit = likeliest(table, near);
+    const odd = oddest(table, fit);
     if (odd === null) break;
+    near = Math.log(fit.ratio);
     setAside.add(odd);
     table = sessionTable(readings, setAside);
   }
@@ -56,14 +61,30 @@ export function cleanedModel(readings: readonly RunningReading[], robust: boolea
   };
 }
 
-/** Position of the reading that the others contradict most, if they do. */
-function oddest(table: SessionTable): number | null {
-  let best: RatioFit | null = null;
-  for (let log = -4; log <= 16; log += 2) {
-    const fit = fitAtRatio(table, Math.exp(log));
-    if (!best || fit.logLik > best.logLik) best = fit;
+/** The likeliest ratio on a coarse grid: a look at all of it, or uphill from `near`, the outcome with one reading more. */
+function likeliest(table: SessionTable, near: number | null): RatioFit {
+  if (near === null) {
+    let best = fitAtRatio(table, Math.exp(LOOK.from));
+    for (let log = LOOK.from + LOOK.step; log <= LOOK.to; log += LOOK.step) {
+      const fit = fitAtRatio(table, Math.exp(log));
+      if (fit.logLik > best.logLik) best = fit;
+    }
+    return best;
   }
-  if (!best || !(best.squares > 0)) return null;
+  let best = fitAtRatio(table, Math.exp(near));
+  for (const direction of [1, -1]) {
+    for (let log = near + direction * LOOK.step; log >= LOOK.from && log <= LOOK.to; log += direction * LOOK.step) {
+      const fit = fitAtRatio(table, Math.exp(log));
+      if (!(fit.logLik > best.logLik)) break;
+      best = fit;
+    }
+  }
+  return best;
+}
+
+/** Position of the reading that the others contradict most, if they do. */
+function oddest(table: SessionTable, best: RatioFit): number | null {
+  if (!(best.squares > 0)) return null;
   const deviations = leftOutDeviations(table, best);
   let furthest = 0;
   deviations.forEach((d, row) => {
