@@ -18,7 +18,6 @@ const RememberedSchema = v.strictObject({
 });
 const CanarySchema = v.strictObject({ device: v.string(), campaigns: v.record(v.string(), RememberedSchema) });
 
-export type Remembered = v.InferOutput<typeof RememberedSchema>;
 export type Canary = v.InferOutput<typeof CanarySchema>;
 
 const key = 'evenload-canary';

@@ -134,4 +134,4 @@ export function repeatsOf(
   return { done: values.length, mean, scatter: values.length < 2 ? null : Math.sqrt(squares / (values.length - 1)) };
 }
 
-export const plainSign = (text: string): string => writtenPlain(text, writer().locale);
+const plainSign = (text: string): string => writtenPlain(text, writer().locale);

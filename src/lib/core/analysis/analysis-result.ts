@@ -7,7 +7,7 @@ import type { Reason, Section } from './reason.ts';
 export type * from './check-result.ts';
 export type * from './comparison-result.ts';
 export type * from './fit-result.ts';
-export type { InputFault, Reason, Section } from './reason.ts';
+export type { Reason, Section } from './reason.ts';
 
 /** Replication, meetings and efficiency of one set of runs. */
 export interface DesignCounts {

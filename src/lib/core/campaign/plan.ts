@@ -180,7 +180,5 @@ export type Measurand = v.InferOutput<typeof MeasurandSchema>;
 export type Condition = v.InferOutput<typeof ConditionSchema>;
 export type PrimaryAnalysis = v.InferOutput<typeof PrimaryAnalysisSchema>;
 export type PlannedSession = v.InferOutput<typeof PlannedSessionSchema>;
-export type Randomisation = v.InferOutput<typeof RandomisationSchema>;
-export type DesignOrigin = v.InferOutput<typeof DesignOriginSchema>;
 export type Plan = v.InferOutput<typeof PlanSchema>;
 export type IssuedPlan = v.InferOutput<typeof IssuedPlanSchema>;

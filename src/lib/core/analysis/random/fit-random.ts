@@ -151,8 +151,3 @@ export function quantityLine(model: RandomModel, name: TermName, adjusted: Float
   const se = Math.sqrt(info.point.sigma2 * adjusted[d]!) / term.scaling.scale;
   return { slope, se, df, t: slope / se, p: tTwoSided(slope / se, df) };
 }
-
-/** Fitted values without the session offsets, all columns; for residuals of the random model. */
-export function coefficientsOf({ problem, beta }: RandomModel): Float64Array {
-  return expand(problem, beta);
-}

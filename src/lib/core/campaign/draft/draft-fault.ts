@@ -27,5 +27,3 @@ export type DraftFault = { path: string; weight: 'stop' | 'told' } & (
   /** More slots than treatments, or as many: every session can hold all of them. */
   | { tag: 'complete-sessions'; slots: number; treatments: number }
 );
-
-export type DraftFaultTag = DraftFault['tag'];

@@ -255,4 +255,3 @@ export const help = {
   } satisfies Record<string, GlossaryEntry>
 };
 
-export type GlossaryKey = keyof typeof help.glossary;
