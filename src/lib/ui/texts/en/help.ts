@@ -254,4 +254,3 @@ export const help = {
     }
   } satisfies Record<string, GlossaryEntry>
 };
-
