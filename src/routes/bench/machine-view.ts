@@ -2,7 +2,7 @@ import type { Machine, Plan } from '#lib/core/campaign/plan.ts';
 import type { ReadingState, RunState, SessionState } from '#lib/core/campaign/state.ts';
 import { readingOrder, type ReadingPlace } from '#lib/core/campaign/steps/due-readings.ts';
 import type { CheckRowView, MachineView, SlotCondition, SlotView, ValueView } from '#lib/ui/bench/view.ts';
-import { writtenPlain, writtenValue } from '#lib/ui/format/reading-text.ts';
+import { writtenValue } from '#lib/ui/format/reading-text.ts';
 import { writer } from '#lib/ui/format/writer.svelte.ts';
 
 export interface Focus {
@@ -133,5 +133,3 @@ export function repeatsOf(
   const squares = values.reduce((sum, x) => sum + (x - mean) ** 2, 0);
   return { done: values.length, mean, scatter: values.length < 2 ? null : Math.sqrt(squares / (values.length - 1)) };
 }
-
-const plainSign = (text: string): string => writtenPlain(text, writer().locale);

@@ -12,7 +12,7 @@ import { kenwardRogerCovariance, singleDf } from './kenward-roger.ts';
 import { maximiseReml, type RemlMaximum } from './maximise-reml.ts';
 import { dfThrough, randomMeans } from './random-means.ts';
 import { remlProblem, type RemlProblem } from './reml-problem.ts';
-import { expand, varianceInformation, type VarianceInformation } from './variance-information.ts';
+import { varianceInformation, type VarianceInformation } from './variance-information.ts';
 
 export interface RandomModel {
   problem: RemlProblem;
