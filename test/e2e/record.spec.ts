@@ -18,7 +18,7 @@ test('record: the demo opens as a list of events with who, when, what, and says 
 
 test('record: a campaign that is not here says so', async ({ page, app }) => {
   await page.goto(`${app.origin}/record?c=01890000-0000-7000-8000-0000000000c0`);
-  await expect(page.getByText('This campaign is not on this device')).toBeVisible();
+  await expect(page.getByText('This device holds no such campaign')).toBeVisible();
 });
 
 test('recover: a wiped database raises the alarm on every page, and erasing needs a saved file and a typed word', async ({

@@ -104,14 +104,7 @@ export const bench: typeof en = {
   },
   empty: {
     none: 'Eine Kampagne öffnen, um am Prüfstand zu arbeiten.',
-    home: 'Zu allen Kampagnen',
     noPlan: 'Der Plan dieser Kampagne ist noch nicht ausgegeben. Es gibt nichts einzulegen.',
-    toPlan: 'Zum Plan',
-    loading: 'Kampagne wird geöffnet …',
-    unknown:
-      'Auf diesem Gerät gibt es diese Kampagne nicht. Liegt sie in einer Datei, diese auf der Startseite einlesen.',
-    cannotOpen:
-      'Die Kampagne ließ sich nicht öffnen. Nichts wurde geändert; vorher Gespeichertes liegt noch hier. Andere Tabs dieses Programms schließen und die Seite neu laden.',
     done: 'Jede Belegung des Plans ist abgeschlossen.',
     doneNext: 'Am Schichtende mit der Kampagnendatei übergeben, oder am Schreibtisch das Ergebnis ansehen.'
   },

@@ -74,10 +74,5 @@ export const record: typeof en = {
   never: 'noch keine',
   proof:
     'Jedes Ereignis trägt das Siegel (SHA-256) des vorigen auf seinem Gerät. Das zeigt Lücken und Änderungen; es ordnet eine Handlung einem Namen und einem Gerät zu, es beweist nicht, wer dort stand.',
-  loading: 'Die Aufzeichnung wird gelesen …',
-  noCampaign: 'Diese Kampagne ist nicht auf diesem Gerät. Vielleicht auf einem anderen: bitten Sie um die Datei.',
-  cannotOpen:
-    'Die Aufzeichnung ließ sich nicht öffnen. Was gespeichert wurde, ist noch auf diesem Gerät; hier wurde nichts verändert.',
-  toRecovery: 'Was zu tun ist',
-  home: 'Alle Kampagnen'
+  none: 'Eine Kampagne öffnen, um ihre Aufzeichnung zu lesen.'
 };

@@ -25,7 +25,6 @@ export const results: typeof en = {
     'Die Rechnung brach ab. Die Aufzeichnung ist nicht betroffen; neu rechnen und die Meldung unten für die Person aufheben, die das Programm betreut.',
   noPlan:
     'Diese Kampagne hat noch keinen herausgegebenen Plan, es gibt also nichts zu vergleichen. Zuerst den Plan herausgeben.',
-  toPlan: 'Zum Plan',
   toBench: 'Zum Prüfstand',
   toDesk: 'Eine Datei einlesen',
   question: 'Frage',
@@ -91,11 +90,7 @@ export const results: typeof en = {
   },
   runName: (treatment, session, slot) => `${treatment}, ${session}${slot === null ? '' : `, Platz ${slot}`}`,
   session: (number) => `Belegung ${number}`,
-  cannotOpen: 'Die Kampagne ließ sich nicht öffnen. Das Aufgezeichnete ist nicht betroffen.',
-  unknown: 'Auf diesem Gerät gibt es diese Kampagne nicht.',
   noneOpen: 'Keine Kampagne ist geöffnet.',
-  home: 'Zu allen Kampagnen',
-  loading: 'Die Kampagne wird geöffnet …',
   formulaFault:
     'Die Formel dieser Messgröße lässt sich nicht verwenden. Siehe Plan; die Messwerte sind nicht betroffen.',
   newRecord: 'Seit dieser Rechnung sind neue Messwerte eingegangen.',

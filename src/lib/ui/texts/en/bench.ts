@@ -107,13 +107,7 @@ export const bench = {
   },
   empty: {
     none: 'Open a campaign to work at the bench.',
-    home: 'Go to all campaigns',
     noPlan: 'The plan of this campaign is not issued yet. There is nothing to load.',
-    toPlan: 'Go to the plan',
-    loading: 'Opening the campaign …',
-    unknown: 'This device holds no such campaign. If it is in a file, bring the file in at the start page.',
-    cannotOpen:
-      'The campaign could not be opened. Nothing was changed; what was saved before is still stored. Close other tabs of this app and load the page again.',
     done: 'Every session of the plan is closed.',
     doneNext: 'Hand over with the campaign file at the end of the shift, or look at the results at the desk.'
   },

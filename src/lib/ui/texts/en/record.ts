@@ -78,9 +78,5 @@ export const record = {
   never: 'none yet',
   proof:
     'Each event holds the seal (SHA-256) of the one before on its device. That shows gaps and edits; it attributes an act to a name and a device, it does not prove who stood there.',
-  loading: 'Reading the record …',
-  noCampaign: 'This campaign is not on this device. It may be on another one: ask for its file.',
-  cannotOpen: 'The record could not be opened. What was saved is still on this device; this screen changed nothing.',
-  toRecovery: 'What can be done',
-  home: 'All campaigns'
+  none: 'Open a campaign to read its record.'
 };

@@ -23,7 +23,6 @@ export const results = {
   failed:
     'The computation broke off. The record is not affected; compute again, and keep the message below for the person who looks after the program.',
   noPlan: 'This campaign has no issued plan yet, so there is nothing to compare. Issue the plan first.',
-  toPlan: 'To the plan',
   toBench: 'To the bench',
   toDesk: 'Bring in a file',
   question: 'Question',
@@ -89,11 +88,7 @@ export const results = {
   runName: (treatment: string, session: string, slot: string | null) =>
     `${treatment}, ${session}${slot === null ? '' : `, slot ${slot}`}`,
   session: (number: string) => `session ${number}`,
-  cannotOpen: 'The campaign could not be opened. What was recorded is not affected.',
-  unknown: 'There is no such campaign on this device.',
   noneOpen: 'No campaign is open.',
-  home: 'To all campaigns',
-  loading: 'Opening the campaign …',
   formulaFault: 'The formula of this measurand cannot be used. See the plan; the readings are not affected.',
   newRecord: 'New readings have come in since this was computed.',
   stale: 'Compute with them',
