@@ -1,33 +1,7 @@
-import type { CampaignState, RunState, SessionState } from '../../campaign/state.ts';
+import type { CampaignState } from '../../campaign/state.ts';
+import { allRuns, number, required, text, time, whole, yes } from './fields.ts';
 import type { PackagedResult } from './package-input.ts';
-import type { Cell, Field, Table } from './table.ts';
-
-const text = (name: string, title: string, rest: Partial<Field> = {}): Field => ({
-  name,
-  type: 'string',
-  title,
-  ...rest
-});
-const number = (name: string, title: string, rest: Partial<Field> = {}): Field => ({
-  name,
-  type: 'number',
-  title,
-  ...rest
-});
-const whole = (name: string, title: string, rest: Partial<Field> = {}): Field => ({
-  name,
-  type: 'integer',
-  title,
-  ...rest
-});
-const yes = (name: string, title: string): Field => ({ name, type: 'boolean', title });
-const time = (name: string, title: string): Field => ({ name, type: 'datetime', title });
-const required = { required: true } as const;
-
-const allRuns = (state: CampaignState): { session: SessionState; run: RunState }[] =>
-  state.sessions.flatMap((session) =>
-    session.runs.flatMap((run) => [...run.earlier, run]).map((run) => ({ session, run }))
-  );
+import type { Cell, Table } from './table.ts';
 
 /** Treatments as planned. */
 export const treatmentsTable = (state: CampaignState): Table => ({

@@ -1,10 +1,7 @@
 import type { MeanLine, PairLine } from '../../analysis/analysis-result.ts';
+import { number, text, whole } from './fields.ts';
 import type { PackagedResult } from './package-input.ts';
-import type { Cell, Field, Table } from './table.ts';
-
-const text = (name: string, title: string): Field => ({ name, type: 'string', title });
-const number = (name: string, title: string): Field => ({ name, type: 'number', title });
-const whole = (name: string, title: string): Field => ({ name, type: 'integer', title });
+import type { Cell, Table } from './table.ts';
 
 interface ModelBlock {
   model: 'fixed' | 'random';

@@ -64,6 +64,8 @@ export const shift: typeof en = {
       'Die geschriebene Datei liest sich anders zurück. Sie zählt nicht als ausgegeben; alles liegt noch hier. Einen anderen Ort versuchen.',
     refused: 'Das Gerät hat die Datei nicht genommen. Alles liegt noch hier. Einen anderen Weg versuchen.',
     failed: 'Die Datei ließ sich nicht machen. Als gespeichert Gekennzeichnetes liegt noch auf diesem Gerät.',
+    table: 'Messwerte als Tabelle (CSV)',
+    tableSays: 'Gültige und verworfene Messwerte für die Tabellenkalkulation. Die Kampagnendatei ersetzt sie nicht.',
     unmarked: 'Die Datei ist heraus, aber das Gerät konnte das nicht aufschreiben. Es wird noch einmal danach gefragt.'
   },
   mirror: {

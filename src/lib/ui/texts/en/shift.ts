@@ -61,6 +61,8 @@ export const shift = {
       'The file that was written reads back differently. It is not counted as exported; everything is still stored here. Try another place.',
     refused: 'The device did not take the file. Everything is still stored here. Try another way.',
     failed: 'The file could not be made. What was marked saved is still stored on this device.',
+    table: 'Readings as a table (CSV)',
+    tableSays: 'Kept and ruined readings for a spreadsheet. It does not replace the campaign file.',
     unmarked: 'The file is out, but this device could not write that down. It will be asked for again.'
   },
   mirror: {
