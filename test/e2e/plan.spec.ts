@@ -176,6 +176,8 @@ test('the plan screen is accessible and laid out for every size', async ({ page,
   await field(page, 'minutesPerSession').fill('45');
   await waitForChoices(page);
   await expect(page.getByText('If work stops early')).toBeVisible({ timeout: 20_000 });
+  await expect(page.getByRole('img', { name: /Who meets whom/ }).locator('path')).not.toHaveCount(0);
+  await expect(page.getByRole('slider', { name: /Who meets whom/ })).toHaveAttribute('aria-valuemax', '36');
   await expectAccessible(page);
   await page.evaluate(() => window.scrollTo(0, 0));
   for (const { name, width, height } of sizes) {

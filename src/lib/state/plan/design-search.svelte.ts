@@ -10,6 +10,8 @@ import { proposeInWorker } from '#lib/workers/propose-designs.ts';
 
 /** Waits so long after the last change before a search begins. */
 const pause = 250;
+/** Shows what is found at most so often: a better design every few milliseconds would only flicker. */
+const rest = 200;
 
 /** The search for designs that answers the request as it stands: started anew at every change, cancelled at will. */
 export class DesignSearch {
@@ -23,6 +25,8 @@ export class DesignSearch {
   #question = '';
   #timer: ReturnType<typeof setTimeout> | undefined;
   #running: AbortController | null = null;
+  #latest: Progress | null = null;
+  #shown = 0;
 
   get choices(): readonly DesignChoice[] {
     return this.#choices;
@@ -76,6 +80,7 @@ export class DesignSearch {
     });
     if (this.#running !== running) return;
     this.#running = null;
+    this.#latest = null;
     if (!answer.ok) {
       if (answer.error.tag === 'worker-died') this.#status = 'failed';
       else {
@@ -90,7 +95,17 @@ export class DesignSearch {
     this.#status = answer.value.cancelled ? 'cancelled' : 'done';
   }
 
-  #take({ done, choices, recommended }: Progress): void {
+  #take(progress: Progress): void {
+    const wait = this.#shown + rest - performance.now();
+    if (this.#latest === null) setTimeout(() => this.#show(), Math.max(0, wait));
+    this.#latest = progress;
+  }
+
+  #show(): void {
+    if (this.#latest === null) return;
+    const { done, choices, recommended } = this.#latest;
+    this.#latest = null;
+    this.#shown = performance.now();
     this.#done = done;
     this.#choices = choices;
     this.#recommended = recommended;
@@ -108,5 +123,6 @@ export class DesignSearch {
     clearTimeout(this.#timer);
     this.#running?.abort();
     this.#running = null;
+    this.#latest = null;
   }
 }

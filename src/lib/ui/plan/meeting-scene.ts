@@ -35,13 +35,20 @@ export function meetingScene(options: MeetingSceneOptions): Scene {
   const cells = new Map<Role, string[]>();
   const written: Mark[] = [];
   const points: Scene['points'] = [];
+  const s = side - gap;
+  const square = `h${s.toFixed(2)}v${s.toFixed(2)}h${(-s).toFixed(2)}z`;
+  const lefts = names.map((_, j) => xOf(j).toFixed(2));
   for (let i = 1; i < t; i++) {
+    const y = yOf(i);
+    const from = `,${y.toFixed(2)}${square}`;
     for (let j = 0; j < i; j++) {
       const times = meets[i]?.[j] ?? 0;
       const kind = role(times, most);
-      const [x, y, s] = [xOf(j), yOf(i), side - gap];
-      const path = `M${x.toFixed(2)},${y.toFixed(2)}h${s.toFixed(2)}v${s.toFixed(2)}h${(-s).toFixed(2)}z`;
-      cells.set(kind, [...(cells.get(kind) ?? []), path]);
+      const x = xOf(j);
+      const path = `M${lefts[j]}${from}`;
+      const paths = cells.get(kind);
+      if (paths) paths.push(path);
+      else cells.set(kind, [path]);
       if (side >= 16) {
         written.push({
           kind: 'text',
