@@ -116,6 +116,11 @@ if (browser) {
     skipped += stats?.skipped ?? 0;
     if (!ok && !stats?.unexpected) failed += 1;
     if (!stats?.expected) failed += 1;
+    await run('faults', ['npm', 'run', '-s', 'test:faults:short'], { env: { CHROMIUM_PATH: chromium }, show: true });
+    /** @type {{ clean: boolean }[]} */
+    const faults = read('faults.json') ?? [{ clean: false }];
+    passed += faults.filter(({ clean }) => clean).length;
+    failed += faults.filter(({ clean }) => !clean).length;
   }
 }
 

@@ -39,11 +39,19 @@ export async function typeUntil(page: Page, prefix: string, stopped: () => boole
 export const savedIn = (said: readonly string[]): string[] =>
   said.flatMap((text) => (text.startsWith('mark: saved ') ? [text.slice('mark: saved '.length)] : []));
 
-/** The states of the field that may be found again: from the last one the page said it had kept, on. */
+/**
+ * The states of the field that may be found again: from the last one the page said it had kept, on. The page tells of
+ * every text in the order typed, so that they are counted: the same beginning of another line is another state.
+ */
 export function possibleDrafts(typed: Typed, said: readonly string[]): Set<string> {
-  const last = said.findLast((text) => text.startsWith('draft: '))?.slice('draft: '.length);
-  const from = last === undefined ? 0 : typed.states.lastIndexOf(last);
-  return new Set(typed.states.slice(Math.max(0, from)));
+  const told = said.filter((text) => /^draft: ./.test(text)).length;
+  let from = 0;
+  for (let left = told, at = 0; left > 0 && at < typed.states.length; at++)
+    if (typed.states[at] !== '') {
+      from = at;
+      left--;
+    }
+  return new Set(typed.states.slice(from));
 }
 
 /** Waits until the page has said of every whole line what became of it. */

@@ -1,10 +1,9 @@
 import { createServer } from 'node:http';
 import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { extname, join } from 'node:path';
+import { closeTabRounds, killRounds } from './break-off.ts';
 import { closeConnectionRounds } from './close-connection.ts';
-import { closeTabRounds } from './close-tab.ts';
 import { fillQuotaRounds } from './fill-quota.ts';
-import { killRounds } from './kill.ts';
 import { corruptRounds, wipeRounds } from './lose-storage.ts';
 import { isClean, tallyLine, type Tally } from './tally.ts';
 
@@ -26,12 +25,12 @@ const address = server.address();
 const origin = `http://localhost:${typeof address === 'object' ? address?.port : 0}/`;
 
 const faults: [name: string, long: number, brief: number, run: (origin: string, rounds: number) => Promise<Tally>][] = [
-  ['kill', 200, 6, killRounds],
-  ['tab', 50, 6, closeTabRounds],
-  ['connection', 50, 8, closeConnectionRounds],
-  ['quota', 50, 8, fillQuotaRounds],
-  ['wipe', 50, 2, wipeRounds],
-  ['corrupt', 50, 3, corruptRounds]
+  ['kill', 200, 4, killRounds],
+  ['tab', 50, 4, closeTabRounds],
+  ['connection', 50, 4, closeConnectionRounds],
+  ['quota', 50, 3, fillQuotaRounds],
+  ['wipe', 50, 1, wipeRounds],
+  ['corrupt', 50, 2, corruptRounds]
 ];
 
 const tallies: Tally[] = [];

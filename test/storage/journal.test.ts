@@ -28,9 +28,9 @@ const summary = (events: CampaignEvent[]) => summaryOf(replay(events), deviceA);
 describe('append', () => {
   it('append(event) is read back by load to the letter, its draft gone with it', async () => {
     const a = new Recorder(deviceA).begin();
-    await putDraft(connection, campaign, 'entry', '12,3');
+    await putDraft(connection, campaign, 'entry', () => '12,3');
     for (const event of a.events) {
-      const written = await append(connection, sealed(a, event), summary(a.events), 'entry');
+      const written = await append(connection, sealed(a, event), summary(a.events), { name: 'entry', now: () => null });
       expect(written).toEqual({ ok: true, value: undefined });
     }
     const loaded = await load(connection, campaign, true);
@@ -39,6 +39,18 @@ describe('append', () => {
     );
     expect(loaded.ok && loaded.value.unreadable).toEqual([]);
     expect(await draftsOf(connection, campaign)).toEqual({ ok: true, value: {} });
+  });
+
+  it('append(event) keeps what is typed in the place of its draft at the moment of the write', async () => {
+    const a = new Recorder(deviceA).begin();
+    const [first] = a.events;
+    if (!first) throw new Error('no event');
+    let typed = '12,3';
+    await putDraft(connection, campaign, 'entry', () => typed);
+    const written = append(connection, sealed(a, first), summary(a.events), { name: 'entry', now: () => typed });
+    typed = '4';
+    expect((await written).ok).toBe(true);
+    expect(await draftsOf(connection, campaign)).toEqual({ ok: true, value: { entry: '4' } });
   });
 
   it('append(second event under a number already taken) is refused as stale and writes nothing', async () => {

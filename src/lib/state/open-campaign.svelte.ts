@@ -10,18 +10,18 @@ import { summaryOf } from '#lib/core/campaign/summary.ts';
 import { fail, ok, type Result } from '#lib/core/result.ts';
 import { holdUpdates } from '#lib/pwa/busy.ts';
 import { remember } from '#lib/storage/canary.ts';
-import { draftsOf, putDraft } from '#lib/storage/drafts.ts';
+import { draftsOf } from '#lib/storage/drafts.ts';
 import type { StorageFault } from '#lib/storage/fault.ts';
-import { append, load } from '#lib/storage/journal.ts';
+import { append, load, type TakenDraft } from '#lib/storage/journal.ts';
 import { tellOthers, whenOthersWrite } from './channel.ts';
 import { connection } from './database.svelte.ts';
 import { device } from './device.svelte.ts';
 import type { ExportedFile, ExportFault } from './make-export.ts';
+import { OpenCampaignDrafts } from './open-campaign-drafts.svelte.ts';
 import { stampNow } from './surroundings.ts';
 import { type Role, WriterLock } from './writer-lock.ts';
 
 type Any = CampaignEvent | UnknownEvent;
-type Drafts = Readonly<Record<string, unknown>>;
 
 /** Why something was not recorded. The value is still where it was typed; nothing was half written. */
 export type WriteFault = StorageFault | BadData | { tag: 'following' } | { tag: 'nothing-to-undo' };
@@ -39,8 +39,7 @@ export class OpenCampaign {
   #shownEvents: readonly Any[] = $derived(this.#events.slice(0, this.#state.events));
   #role = $state<Role>('following');
   #writes = $state(0);
-  #drafts = $state.raw<Drafts>({});
-  #draftFault = $state.raw<StorageFault | null>(null);
+  #drafts: OpenCampaignDrafts;
   #unsaved = $state.raw<readonly CampaignEvent[]>([]);
   #faults: readonly { what: string; detail: string }[] = [];
   #queue: Promise<unknown> = Promise.resolve();
@@ -48,10 +47,10 @@ export class OpenCampaign {
   #stopListening: () => void;
   #letUpdate: (() => void) | null = null;
 
-  constructor(id: string, events: Any[], drafts: Drafts) {
+  constructor(id: string, events: Any[], drafts: Readonly<Record<string, unknown>>) {
     this.id = id;
     this.#events = events;
-    this.#drafts = drafts;
+    this.#drafts = new OpenCampaignDrafts(id, drafts);
     this.#replay = replayOf(id, events);
     this.#state = this.#replay.state;
     this.#lock = new WriterLock(id, (role) => void this.#becomes(role));
@@ -85,11 +84,13 @@ export class OpenCampaign {
   record<K extends Kind>(
     kind: K,
     data: DataOf<K>,
-    options: { draft?: string; who?: string } = {}
+    { draft = null, who = device.who }: { draft?: string | null; who?: string } = {}
   ): Promise<Result<CampaignEvent, WriteFault>> {
     const plain = $state.snapshot(data) as DataOf<K>;
     const weighed = kind === 'contradiction-decided' ? this.#weighed(plain as DataOf<'contradiction-decided'>) : plain;
-    return this.#writing(() => this.#write(kind, weighed as DataOf<K>, options, 1));
+    return this.#writing(
+      this.#drafts.recording(draft, (taken) => this.#write(kind, weighed as DataOf<K>, taken, who, 1))
+    );
   }
 
   /** Takes back the last act of this device, as a new event. */
@@ -97,7 +98,7 @@ export class OpenCampaign {
     return this.#writing(async () => {
       const target = this.lastUndoable;
       return target
-        ? this.#write('undone', { target: target.id, reason }, {}, 1)
+        ? this.#write('undone', { target: target.id, reason }, null, device.who, 1)
         : fail<WriteFault>({ tag: 'nothing-to-undo' });
     });
   }
@@ -105,15 +106,15 @@ export class OpenCampaign {
   async #write<K extends Kind>(
     kind: K,
     data: DataOf<K>,
-    options: { draft?: string; who?: string },
+    draft: TakenDraft | null,
+    who: string,
     attempt: number
   ): Promise<Result<CampaignEvent, WriteFault>> {
     if (this.#role === 'following') return fail({ tag: 'following' });
-    const made = makeEvent({ kind, data, who: options.who ?? device.who }, this.#head(), stampNow());
+    const made = makeEvent({ kind, data, who }, this.#head(), stampNow());
     if (!made.ok) return made;
     const { event } = made.value;
     this.#replay.apply(event);
-    const draft = options.draft ?? null;
     const summary = summaryOf(this.#replay.state, device.id);
     const written = await append(connection, made.value, summary, draft);
     if (!written.ok) {
@@ -123,10 +124,9 @@ export class OpenCampaign {
         return written;
       }
       await this.#catchUp();
-      return this.#write(kind, data, options, attempt + 1);
+      return this.#write(kind, data, draft, who, attempt + 1);
     }
     this.#events.push(event);
-    if (draft !== null) this.#drafts = without(this.#drafts, draft);
     this.#show();
     remember(device.id, summary, event.id, event.at, kind === 'exported');
     tellOthers(this.id);
@@ -146,7 +146,13 @@ export class OpenCampaign {
     const faults = this.#faults;
     this.#faults = [];
     for (const { what, detail } of faults)
-      await this.#write('device-fault', { what: what.slice(0, 80), detail: detail.slice(0, 2000) }, {}, 1);
+      await this.#write(
+        'device-fault',
+        { what: what.slice(0, 80), detail: detail.slice(0, 2000) },
+        null,
+        device.who,
+        1
+      );
   }
 
   /** Acts that could not be written, oldest first; empty again once a write has completed. */
@@ -181,25 +187,21 @@ export class OpenCampaign {
 
   /** What the engineer has filled in so far; the issued plan once there is one. */
   get draft(): Plan | null {
-    return (this.#drafts[planDraft] as Plan | undefined) ?? this.#state.plan;
+    return (this.#drafts.get(planDraft) as Plan | undefined) ?? this.#state.plan;
   }
   setDraft(plan: Plan | null): Promise<Result<void, StorageFault>> {
     return this.setEntryDraft(planDraft, plan);
   }
   /** Something typed and not yet recorded, by the name of its field. */
   entryDraft(name: string): unknown {
-    return this.#drafts[name];
+    return this.#drafts.get(name);
   }
-  async setEntryDraft(name: string, value: unknown): Promise<Result<void, StorageFault>> {
-    const plain: unknown = $state.snapshot(value);
-    this.#drafts = plain === null ? without(this.#drafts, name) : { ...this.#drafts, [name]: plain };
-    const kept = await putDraft(connection, this.id, name, plain);
-    this.#draftFault = kept.ok ? null : kept.error;
-    return kept;
+  setEntryDraft(name: string, value: unknown): Promise<Result<void, StorageFault>> {
+    return this.#drafts.set(name, $state.snapshot(value));
   }
   /** Why the last draft could not be kept; it is still on the screen. */
   get draftFault(): StorageFault | null {
-    return this.#draftFault;
+    return this.#drafts.fault;
   }
 
   /** Makes the campaign file and reads it back; nothing is called exported before that holds. */
@@ -255,7 +257,7 @@ export class OpenCampaign {
     for (const event of fresh) this.#replay.apply(event);
     this.#events.push(...fresh);
     const drafts = await draftsOf(connection, this.id);
-    if (drafts.ok) this.#drafts = drafts.value;
+    if (drafts.ok) this.#drafts.adopt(drafts.value);
     this.#show();
   }
 
@@ -291,11 +293,6 @@ function replayOf(id: string, events: readonly Any[]): Replay {
   const replayed = new Replay(id);
   for (const event of events) replayed.apply(event);
   return replayed;
-}
-
-function without(drafts: Drafts, name: string): Drafts {
-  const { [name]: _gone, ...rest } = drafts;
-  return rest;
 }
 
 /** Opens a campaign in this tab: reads its log, replays it, finds out whether this tab writes. */

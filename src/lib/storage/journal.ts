@@ -5,6 +5,7 @@ import { rememberSeal, sha256OfText } from '#lib/core/campaign/seal.ts';
 import type { CampaignSummary } from '#lib/core/campaign/summary.ts';
 import type { Result } from '#lib/core/result.ts';
 import type { Connection } from './connection.ts';
+import { storedDraft } from './drafts.ts';
 import type { StorageFault } from './fault.ts';
 import type { Place, StoredEvent } from './schema.ts';
 
@@ -22,16 +23,24 @@ const storedOf = ({ event, text, seal }: Pick<Sealed, 'text' | 'seal'> & { event
 
 const strict = { durability: 'strict' } as const;
 
+/** The draft of an act on its way into the record. */
+export interface TakenDraft {
+  name: string;
+  /** What is typed there by now besides the act itself, asked inside the transaction; null: nothing. */
+  now: () => unknown;
+}
+
 /**
  * Writes one event for good. It returns after the transaction has completed with strict durability, and only then may
- * anybody say *saved*. The draft it came from goes in the same transaction. Safe to run again: after a lost connection
- * the event is looked for first, and a number another tab has taken meanwhile is refused (`stale`).
+ * anybody say *saved*. The draft it came from goes in the same transaction, and what was typed in its place meanwhile
+ * stays. Safe to run again: after a lost connection the event is looked for first, and a number another tab has taken
+ * meanwhile is refused (`stale`).
  */
 export function append(
   connection: Connection,
   sealed: Sealed,
   summary: CampaignSummary,
-  draft: string | null = null
+  draft: TakenDraft | null = null
 ): Promise<Result<void, StorageFault>> {
   const { campaign } = sealed.event;
   return connection.write(async (db, attempt) => {
@@ -41,7 +50,13 @@ export function append(
     const events = tx.objectStore('events');
     if (attempt > 1 && (await events.get(sealed.event.id))?.text === sealed.text) return await tx.done;
     const writes: Promise<unknown>[] = [events.add(storedOf(sealed)), tx.objectStore('campaigns').put(summary)];
-    if (draft !== null) writes.push(tx.objectStore('drafts').delete([campaign, draft]));
+    if (draft !== null) {
+      const drafts = tx.objectStore('drafts');
+      const left = draft.now();
+      writes.push(
+        left === null ? drafts.delete([campaign, draft.name]) : drafts.put(storedDraft(campaign, draft.name, left))
+      );
+    }
     await Promise.all([...writes, tx.done]);
   });
 }
