@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
+import { addSession } from '#lib/core/design/add-session.ts';
 import { aValue, pairVariance } from '#lib/core/design/a-value.ts';
 import { concurrence, concurrenceRange, replications } from '#lib/core/design/concurrence.ts';
 import { connectedParts, isConnected } from '#lib/core/design/connected-parts.ts';
@@ -135,5 +136,38 @@ describe('identities', () => {
     const values = symmetricEigenvalues(Float64Array.of(2, -1, 0, -1, 2, -1, 0, -1, 2), 3);
     [2 - Math.SQRT2, 2, 2 + Math.SQRT2].forEach((value, at) => expect(values[at]).toBeCloseTo(value, 12));
     expect(() => symmetricEigenvalues(new Float64Array(3), 2)).toThrow(RangeError);
+  });
+});
+
+describe('addSession', () => {
+  test('addSession(C⁺, t, block) gives the C⁺ of the larger design', () => {
+    fc.assert(
+      fc.property(
+        design.chain(({ t, blocks }) =>
+          fc.record({
+            t: fc.constant(t),
+            blocks: fc.constant(blocks),
+            more: fc.array(fc.integer({ min: 0, max: t - 1 }), { minLength: 1, maxLength: t })
+          })
+        ),
+        ({ t, blocks, more }) => {
+          const inverse = moorePenrose(informationMatrix(blocks, t), t);
+          fc.pre(inverse !== undefined);
+          addSession(inverse!, t, more);
+          const direct = moorePenrose(informationMatrix([...blocks, more], t), t)!;
+          inverse!.forEach((value, at) => expect(value).toBeCloseTo(direct[at]!, 10));
+        }
+      )
+    );
+  });
+
+  test('addSession(C⁺, t, block) over two hundred sessions keeps the A-value to 1e-11', () => {
+    const blocks = Array.from({ length: 200 }, (_, s) => [s % 20, (s * 7 + 3) % 20, (s * 11 + 8) % 20]);
+    const first = blocks.slice(0, 40);
+    const inverse = moorePenrose(informationMatrix(first, 20), 20)!;
+    for (const block of blocks.slice(40)) addSession(inverse, 20, block);
+    let trace = 0;
+    for (let i = 0; i < 20; i++) trace += inverse[i * 20 + i]!;
+    expect(Math.abs((2 * trace) / 19 / aValue(blocks, 20) - 1)).toBeLessThan(1e-11);
   });
 });

@@ -1,6 +1,8 @@
 import type { SeededRandom } from '#lib/core/numerics/random/seeded-random.ts';
-import { aValue } from './a-value.ts';
-import { connectedParts } from './connected-parts.ts';
+import { addSession } from './add-session.ts';
+import { isConnected } from './connected-parts.ts';
+import { informationMatrix } from './information-matrix.ts';
+import { moorePenrose } from './moore-penrose.ts';
 
 /** How well an order of sessions stands an early stop. */
 export interface EarlyStop {
@@ -21,18 +23,25 @@ export interface EarlyStop {
  */
 export function earlyStop(blocks: readonly (readonly number[])[], treatments: number): EarlyStop {
   const efficiency: number[] = [];
-  let connectedAfter: number | null = null;
+  let inverse: Float64Array | undefined;
   let information = 0;
-  for (let m = 1; m <= blocks.length; m++) {
-    information += Math.max(0, blocks[m - 1]!.length - 1);
-    const first = blocks.slice(0, m);
-    if (connectedAfter === null && connectedParts(first, treatments).length > 1) {
-      efficiency.push(0);
-      continue;
+  blocks.forEach((block, at) => {
+    information += Math.max(0, block.length - 1);
+    if (inverse) addSession(inverse, treatments, block);
+    else {
+      const first = blocks.slice(0, at + 1);
+      if (isConnected(first, treatments)) inverse = moorePenrose(informationMatrix(first, treatments), treatments);
     }
-    connectedAfter ??= m;
-    efficiency.push((2 * (treatments - 1)) / information / aValue(first, treatments));
-  }
+    if (!inverse) {
+      efficiency.push(0);
+      return;
+    }
+    let trace = 0;
+    for (let i = 0; i < treatments; i++) trace += inverse[i * treatments + i]!;
+    efficiency.push((treatments - 1) ** 2 / information / trace);
+  });
+  const connectedAt = efficiency.findIndex((value) => value > 0);
+  const connectedAfter = connectedAt < 0 ? null : connectedAt + 1;
   return { connectedAfter, efficiency, sum: efficiency.reduce((sum, value) => sum + value, 0) };
 }
 
@@ -49,8 +58,8 @@ const better = (a: EarlyStop, b: EarlyStop): boolean =>
  * @param groupOf shift group of each session when the design is resolvable, else null
  * @returns positions in `blocks` in loading order
  *
- * Cost: a fixed number of tries, so that the same seed gives the same order: about 4e7 steps of a t³ b evaluation, at
- * least 8 tries, at most 3000.
+ * Cost: a fixed number of tries, so that the same seed gives the same order: about 4e7 steps of a t² k b evaluation, at
+ * least 40 tries, at most 3000.
  *
  * **Checked by** test/core/design/early-stop-order.test.ts
  */
@@ -60,7 +69,8 @@ export function earlyStopOrder(
   groupOf: readonly number[] | null,
   random: SeededRandom
 ): number[] {
-  const tries = Math.min(3000, Math.max(8, Math.floor(4e7 / (blocks.length * (treatments ** 3 / 2 + 200)))));
+  const runs = blocks.reduce((sum, { length }) => sum + length, 0);
+  const tries = Math.min(3000, Math.max(40, Math.floor(4e7 / (runs * treatments ** 2 + 200 * blocks.length + 1))));
   const judge = (order: readonly number[]): EarlyStop =>
     earlyStop(
       order.map((at) => blocks[at]!),

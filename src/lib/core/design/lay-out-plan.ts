@@ -6,7 +6,7 @@ import type { SlotLayout } from './slot-layout.ts';
 import { drawSpecimenCodes } from './specimen-codes.ts';
 
 /** Name and version of the rules by which chance makes a loading order. Any change of the rules is a new version. */
-export const LAYOUT_ALGORITHM = { name: 'loading-order', version: 1 } as const;
+export const LAYOUT_ALGORITHM = { name: 'loading-order', version: 2 } as const;
 
 export interface LayoutRequest {
   /** Ids of the treatments, in the person's order. */
