@@ -29,7 +29,7 @@ describe('layOutPlan', () => {
       generator: 'xoroshiro128plus',
       generatorVersion: 1,
       algorithm: 'loading-order',
-      algorithmVersion: 1
+      algorithmVersion: 2
     });
   });
 
