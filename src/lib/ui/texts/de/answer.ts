@@ -1,4 +1,5 @@
 import type { answer as en } from '../en/answer.ts';
+import { pIs } from '../p-value.ts';
 
 export const answer: typeof en = {
   and: (names) => (names.length < 2 ? (names[0] ?? '') : `${names.slice(0, -1).join(', ')} und ${names.at(-1)}`),
@@ -21,15 +22,15 @@ export const answer: typeof en = {
   worse: (way, names) => `Deutlich ${way === 'lower' ? 'höher' : 'niedriger'}: ${names}.`,
   further: (names) => `Deutlich weiter weg: ${names}.`,
   noneDiffer: (what, p) =>
-    `Bei „${what}“ zeigt sich kein Unterschied zwischen den Varianten${p === null ? '' : ` (p = ${p})`}.`,
+    `Bei „${what}“ zeigt sich kein Unterschied zwischen den Varianten${p === null ? '' : ` (${pIs(p)})`}.`,
   noneDifferMore: (leader, mean) =>
     `An erster Stelle lag ${leader} mit ${mean}. Das beweist nicht, dass alle gleich sind: nachsehen, wie klein ein Unterschied sein durfte, um gefunden zu werden.`,
   parts: (parts) =>
     `Die Belegungen zerfallen in ${parts} Gruppen ohne gemeinsame Variante; zwischen den Gruppen lässt sich nichts vergleichen.`,
   part: (names, sentence) => `Unter ${names}: ${sentence}`,
   ranksDiffer: (p, order) =>
-    `Die Ränge der Varianten unterscheiden sich (p = ${p}). Von der besten zur schlechtesten: ${order}.`,
-  ranksDoNotDiffer: (p) => `Die Ränge zeigen keinen Unterschied zwischen den Varianten (p = ${p}).`,
+    `Die Ränge der Varianten unterscheiden sich (${pIs(p)}). Von der besten zur schlechtesten: ${order}.`,
+  ranksDoNotDiffer: (p) => `Die Ränge zeigen keinen Unterschied zwischen den Varianten (${pIs(p)}).`,
   meansOnly: (order) => `Nur Mittelwerte, noch keine Fehler. Von der besten zur schlechtesten: ${order}.`,
   none: 'Noch keine Antwort.',
   modelFixed: 'Belegungen fest',

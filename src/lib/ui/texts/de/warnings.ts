@@ -1,4 +1,5 @@
 import type { warnings as en } from '../en/warnings.ts';
+import { pIs } from '../p-value.ts';
 
 export const warnings: typeof en = {
   parts: (parts) => ({
@@ -22,37 +23,37 @@ export const warnings: typeof en = {
     act: 'Nichts zu beheben. Mit zufälligen Belegungen liegt das Ergebnis dann nahe an den einfachen Mittelwerten; es bei der im Plan festgelegten Auswertung belassen.'
   }),
   outlier: (run, p) => ({
-    said: `Ein Messwert fällt auf: ${run} (p = ${p}, die Zahl der Messwerte berücksichtigt).`,
+    said: `Ein Messwert fällt auf: ${run} (${pIs(p)}, die Zahl der Messwerte berücksichtigt).`,
     act: 'Notizen und Rohwert nachsehen. Nur aus einem gefundenen Grund verwerfen, nie weil er auffällt.'
   }),
   slots: (p, inModel) => ({
-    said: `Die Plätze unterscheiden sich (p = ${p}).`,
+    said: `Die Plätze unterscheiden sich (${pIs(p)}).`,
     act: inModel
       ? 'Das Modell berücksichtigt die Plätze bereits. Die Maschine prüfen lassen.'
       : 'Die Maschine prüfen lassen und einen Nachtrag erwägen, der die Plätze ins Modell nimmt.'
   }),
   trend: (p) => ({
-    said: `Die Abweichungen der Belegungen laufen mit der Zeit davon (p = ${p}).`,
+    said: `Die Abweichungen der Belegungen laufen mit der Zeit davon (${pIs(p)}).`,
     act: 'Vergleiche innerhalb der Belegungen sind nicht betroffen. Nach Verschleiß, Anlauf oder wechselndem Verbrauchsmaterial suchen.'
   }),
   scatter: (p) => ({
-    said: `Die Varianten streuen verschieden stark (p = ${p}).`,
+    said: `Die Varianten streuen verschieden stark (${pIs(p)}).`,
     act: 'Ein gemeinsamer Fehler ist dann für manche zu klein, für andere zu groß. Siehe „Potenzskala“; oft hilft ein Logarithmus.'
   }),
   nonadditive: (p) => ({
-    said: `Die Abweichungen der Belegungen wachsen oder schrumpfen mit der Höhe der Varianten (p = ${p}).`,
+    said: `Die Abweichungen der Belegungen wachsen oder schrumpfen mit der Höhe der Varianten (${pIs(p)}).`,
     act: 'Siehe „Potenzskala“: auf einer passenden Skala addieren sich die Abweichungen.'
   }),
   scale: (lambda, p) => ({
-    said: `Eine andere Skala (Potenz ${lambda}) passt besser als die abgelesene (p = ${p}).`,
+    said: `Eine andere Skala (Potenz ${lambda}) passt besser als die abgelesene (${pIs(p)}).`,
     act: 'Die Urteile unter „Potenzskala“ vergleichen. Stimmen sie überein, bei der abgelesenen Skala bleiben.'
   }),
   notNormal: (p) => ({
-    said: `Die Residuen sehen nicht normalverteilt aus (p = ${p}).`,
+    said: `Die Residuen sehen nicht normalverteilt aus (${pIs(p)}).`,
     act: 'Siehe das Normalplot. Mittelwertunterschiede vertragen milde Abweichungen, einzelne seltsame Werte nicht.'
   }),
   ruinAssociated: (p) => ({
-    said: `Das Verwerfen trifft die Varianten ungleich (p = ${p}); was fehlt, fehlt vielleicht nicht zufällig.`,
+    said: `Das Verwerfen trifft die Varianten ungleich (${pIs(p)}); was fehlt, fehlt vielleicht nicht zufällig.`,
     act: 'Unter „Verworfene Läufe“ mit und ohne vergleichen und die Ursache im Bericht nennen.'
   }),
   verdictTurns: (pairs) => ({

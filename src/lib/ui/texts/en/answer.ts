@@ -1,4 +1,5 @@
 import { inSentence } from '../../format/unit-text.ts';
+import { pIs } from '../p-value.ts';
 
 /** The finding as one sentence a person would say aloud. Values arrive written, with unit. */
 export const answer = {
@@ -24,15 +25,15 @@ export const answer = {
   worse: (way: 'lower' | 'higher', names: string) => `Clearly ${way === 'lower' ? 'higher' : 'lower'}: ${names}.`,
   further: (names: string) => `Clearly further off: ${names}.`,
   noneDiffer: (what: string, p: string | null) =>
-    `No difference in ${inSentence(what)} between the treatments is shown${p === null ? '' : ` (p = ${p})`}.`,
+    `No difference in ${inSentence(what)} between the treatments is shown${p === null ? '' : ` (${pIs(p)})`}.`,
   noneDifferMore: (leader: string, mean: string) =>
     `${leader} came first with ${mean}. This is no proof that all are equal: see how small a difference these runs could have found.`,
   parts: (parts: number) =>
     `The sessions fall into ${parts} groups without a treatment in common; between the groups nothing can be compared.`,
   part: (names: string, sentence: string) => `Among ${names}: ${sentence}`,
   ranksDiffer: (p: string, order: string) =>
-    `The ranks differ between treatments (p = ${p}). From best to worst: ${order}.`,
-  ranksDoNotDiffer: (p: string) => `The ranks show no difference between treatments (p = ${p}).`,
+    `The ranks differ between treatments (${pIs(p)}). From best to worst: ${order}.`,
+  ranksDoNotDiffer: (p: string) => `The ranks show no difference between treatments (${pIs(p)}).`,
   meansOnly: (order: string) => `Means only, no errors yet. From best to worst: ${order}.`,
   none: 'No answer yet.',
   modelFixed: 'sessions fixed',

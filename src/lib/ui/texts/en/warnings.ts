@@ -1,3 +1,5 @@
+import { pIs } from '../p-value.ts';
+
 /** Each warning: what was seen, and what to do. Numbers arrive written. */
 export const warnings = {
   parts: (parts: string) => ({
@@ -21,37 +23,37 @@ export const warnings = {
     act: 'Nothing to mend. With sessions random the result is then close to plain averages; keep to the analysis fixed in the plan.'
   }),
   outlier: (run: string, p: string) => ({
-    said: `One reading stands out: ${run} (p = ${p}, allowing for the number of readings).`,
+    said: `One reading stands out: ${run} (${pIs(p)}, allowing for the number of readings).`,
     act: 'Look up its notes and the raw entry. Strike it out only for a cause found, never because it stands out.'
   }),
   slots: (p: string, inModel: boolean) => ({
-    said: `Slots differ (p = ${p}).`,
+    said: `Slots differ (${pIs(p)}).`,
     act: inModel
       ? 'The model already allows for slots. Have the machine looked at.'
       : 'Have the machine looked at, and consider an amendment that takes slots into the model.'
   }),
   trend: (p: string) => ({
-    said: `Session offsets drift with time (p = ${p}).`,
+    said: `Session offsets drift with time (${pIs(p)}).`,
     act: 'Comparisons within sessions are not affected. Look for wear, warm-up or a changing consumable.'
   }),
   scatter: (p: string) => ({
-    said: `Treatments scatter differently (p = ${p}).`,
+    said: `Treatments scatter differently (${pIs(p)}).`,
     act: 'A common error is then too small for some and too large for others. See Power scale; a logarithm often helps.'
   }),
   nonadditive: (p: string) => ({
-    said: `Session offsets grow or shrink with the level of the treatments (p = ${p}).`,
+    said: `Session offsets grow or shrink with the level of the treatments (${pIs(p)}).`,
     act: 'See Power scale: on a fitting scale offsets simply add.'
   }),
   scale: (lambda: string, p: string) => ({
-    said: `Another scale (power ${lambda}) fits the readings better than the one as read (p = ${p}).`,
+    said: `Another scale (power ${lambda}) fits the readings better than the one as read (${pIs(p)}).`,
     act: 'Compare the verdicts under Power scale. If they agree, stay with the scale as read.'
   }),
   notNormal: (p: string) => ({
-    said: `The residuals do not look normal (p = ${p}).`,
+    said: `The residuals do not look normal (${pIs(p)}).`,
     act: 'See the normal plot. Differences of means are robust to mild departures; single odd readings are not.'
   }),
   ruinAssociated: (p: string) => ({
-    said: `Ruin falls unevenly on the treatments (p = ${p}), so what is missing may not be missing by chance.`,
+    said: `Ruin falls unevenly on the treatments (${pIs(p)}), so what is missing may not be missing by chance.`,
     act: 'Compare with and without under Ruined runs, and name the cause in the report.'
   }),
   verdictTurns: (pairs: string) => ({
