@@ -46,6 +46,14 @@ describe('replay', () => {
     expect(status()).toBe('reading');
   });
 
+  it('replay(reinstatements that name each other) ends', () => {
+    const a = new Recorder(deviceA).begin();
+    const first = a.record('reinstated', { target: a.events[0]?.id ?? '', reason: 'a' });
+    const second = a.record('reinstated', { target: first.id, reason: 'b' });
+    const ring = [...a.events.slice(0, 2), { ...first, data: { target: second.id, reason: 'a' } }, second];
+    expect(replay(ring as CampaignEvent[]).events).toBe(4);
+  });
+
   it('replay(correction) lets the corrected value count and keeps both versions', () => {
     const a = new Recorder(deviceA).begin();
     const first = a.reading(1, 0, 12.3);

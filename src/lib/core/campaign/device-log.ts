@@ -1,3 +1,4 @@
+import type { DeviceCheckpoint } from './checkpoint.ts';
 import type { CampaignEvent, UnknownEvent } from './event.ts';
 import { markOf } from './marks.ts';
 import { instantOf } from './rfc3339.ts';
@@ -19,10 +20,26 @@ export class DeviceLog {
   #events: Any[] = [];
   #flags: RecordFlag[] = [];
   #state: DeviceState;
+  /** How it stood before the event that came last, when that one continued the chain. */
+  #before: { flags: RecordFlag[]; state: DeviceState } | null = null;
 
   constructor(device: string) {
     this.device = device;
     this.#state = { device, seq: 0, head: noHash, sinceExport: 0, lastExport: null };
+  }
+
+  /** A chain read up to a checkpoint: it takes what continues it, and nothing else. */
+  static from({ state, flags, tail }: DeviceCheckpoint): DeviceLog {
+    const log = new DeviceLog(state.device);
+    log.#events = [...tail];
+    log.#flags = [...flags];
+    log.#state = state;
+    return log;
+  }
+
+  get checkpoint(): DeviceCheckpoint {
+    const from = this.#events.findLastIndex(({ seq }) => seq < this.#state.seq) + 1;
+    return { state: this.#state, flags: this.#flags, tail: this.#events.slice(from) };
   }
 
   get state(): DeviceState {
@@ -33,9 +50,14 @@ export class DeviceLog {
     return this.#flags;
   }
 
+  /** Does an event with this number continue the chain, with or without a gap? */
+  continues(seq: number): boolean {
+    return seq > this.#state.seq;
+  }
+
   add(event: Any): void {
-    const last = this.#events.at(-1);
-    const inTurn = last ? event.seq === last.seq + 1 : event.seq === 1;
+    const inTurn = this.continues(event.seq);
+    this.#before = inTurn ? { flags: this.#flags, state: this.#state } : null;
     this.#events.push(event);
     if (inTurn) this.#follow(this.#events.length - 1, event);
     else {
@@ -44,6 +66,16 @@ export class DeviceLog {
       this.#state = { device: this.device, seq: 0, head: noHash, sinceExport: 0, lastExport: null };
       this.#events.forEach((one, index) => this.#follow(index, one));
     }
+  }
+
+  /** Takes the event that came last out again; returns whether any is left. Throws when it did not continue the chain. */
+  removeLast(): boolean {
+    if (!this.#before) throw new Error('removeLast: expected an event that continued the chain, got another');
+    this.#events.pop();
+    this.#flags = this.#before.flags;
+    this.#state = this.#before.state;
+    this.#before = null;
+    return this.#events.length > 0;
   }
 
   #follow(index: number, event: Any): void {

@@ -1,134 +1,101 @@
 import { isKnown } from './check-event.ts';
-import { DeviceLog } from './device-log.ts';
+import { type CoreCheckpoint, packRuns, type SessionCheckpoint, type SessionHead } from './checkpoint.ts';
+import { assembleState } from './assemble-state.ts';
+import { type ColdSession, coldSession } from './cold-session.ts';
 import type { CampaignEvent, UnknownEvent } from './event.ts';
+import { HeldEvents } from './held-events.ts';
 import { inOrder } from './in-order.ts';
-import { isUndoable, markOf, type Of } from './marks.ts';
+import type { PlannedSession } from './plan.ts';
 import { reducePlan, type ReducedPlan } from './reduce-plan.ts';
-import { noteOf, type Surroundings } from './reduce-run.ts';
+import type { Surroundings } from './reduce-run.ts';
 import { reduceSession, type ReducedSession } from './reduce-session.ts';
-import { reduceShifts } from './reduce-shifts.ts';
-import { resolve, type Decision } from './resolve.ts';
-import { sessionOf } from './session-of.ts';
-import type { CampaignState, Contradiction, RecordFlag, SessionState } from './state.ts';
+import { SpecimenPlaces } from './specimen-places.ts';
+import type { CampaignState } from './state.ts';
+import { tallyOf } from './summary.ts';
 
 type Any = CampaignEvent | UnknownEvent;
 const none: readonly CampaignEvent[] = [];
 
+/** What must be supplied before a replay that goes on from a checkpoint can take an event in. */
+export type Needs = 'everything' | { sessions: string[]; event: string | null };
+
 /**
  * Replays events into the state they describe. The state is a pure function of the set of events: their order and
  * their repetition do not matter. `apply` costs one session's events, not the log's.
- * Checked by: test/core/campaign/replay.test.ts, test/core/campaign/replay.property.test.ts.
+ *
+ * A replay can go on from a checkpoint. Its sessions are then cold, known by their state and not by their events, until
+ * an event needs one of them: ask `needs` before each `apply`, and `supply` what it says.
+ * Checked by: test/core/campaign/replay.test.ts, test/core/campaign/replay.property.test.ts,
+ * test/core/campaign/checkpoint.property.test.ts.
  */
 export class Replay {
   #campaign: string;
-  #ids = new Map<string, Any>();
-  #devices = new Map<string, DeviceLog>();
-  #sessions = new Map<string, CampaignEvent[]>();
-  #overall: CampaignEvent[] = [];
-  #planning: CampaignEvent[] = [];
-  #unknown: UnknownEvent[] = [];
-  /** Events that speak of another event, by the id they name. */
-  #undoing = new Map<string, Of<'undone'>[]>();
-  #reinstating = new Map<string, Of<'reinstated'>[]>();
-  #decisions = new Map<string, Decision[]>();
+  #held = new HeldEvents();
   #plan: ReducedPlan = reducePlan(
     [],
     () => [],
     () => false
   );
+  #planned = new Map<string, PlannedSession>();
   #reduced = new Map<string, ReducedSession>();
-  /** Standing loads of each specimen code, by session. */
-  #loads = new Map<string, Map<string, Of<'specimen-loaded'>[]>>();
-  #twice = new Map<string, Contradiction>();
-  #aside = new Set<string>();
-  #doubtful = new Set<string>();
+  #places = new SpecimenPlaces();
+  #cold = new Map<string, ColdSession>();
+  /** Cold sessions by the specimen codes they name; made when first asked for. */
+  #coldByCode: Map<string, string[]> | null = null;
+  /** Events asked for that the log does not have. */
+  #absent = new Set<string>();
   #dirty = new Set<string>();
+  #changed = new Set<string>();
   #replan = true;
   #state: CampaignState | null = null;
-  #tick = 0;
 
   constructor(campaign: string) {
     this.#campaign = campaign;
   }
 
+  /** Goes on where a checkpoint was taken; null when a session's part is not there. */
+  static from(core: CoreCheckpoint, parts: ReadonlyMap<string, { head: SessionHead; runs: string }>): Replay | null {
+    const replay = new Replay(core.campaign);
+    replay.#held = HeldEvents.from(core);
+    replay.#places.restore(core.twice, core.aside, core.doubtful);
+    replay.#makePlan();
+    replay.#replan = false;
+    for (const plan of replay.#planned.values()) {
+      const part = parts.get(plan.id);
+      if (!part) return null;
+      const cold = coldSession(plan, part.head, part.runs);
+      replay.#cold.set(plan.id, cold);
+      replay.#reduced.set(plan.id, cold.reduced);
+    }
+    return replay;
+  }
+
   /** Takes an event in; an event whose id it holds already changes nothing. */
   apply(event: Any): void {
-    if (this.#ids.has(event.id)) return;
-    this.#ids.set(event.id, event);
+    if (this.#held.add(event)) this.#touch(event);
+  }
+
+  /** Takes the event applied last out again: it could not be written. It must have continued its device's chain. */
+  retract(): void {
+    this.#touch(this.#held.removeLast());
+  }
+
+  #touch(event: Any): void {
     this.#state = null;
-    this.#tick = Math.max(this.#tick, event.tick ?? 0);
-    let log = this.#devices.get(event.device);
-    if (!log) this.#devices.set(event.device, (log = new DeviceLog(event.device)));
-    log.add(event);
-    // Something may have spoken of this event before it came.
-    if (!isKnown(event)) {
-      this.#unknown.push(event);
-      return;
-    }
-    const session = sessionOf(event);
-    if (session !== null) {
-      const list = this.#sessions.get(session);
-      if (list) list.push(event);
-      else this.#sessions.set(session, [event]);
-      this.#dirty.add(session);
-    } else this.#takeOverall(event);
+    if (!isKnown(event)) return;
+    const touched = this.#held.touchedBy(event, this.#sessionsOf);
+    if (touched === 'plan') this.#replan = true;
+    else for (const session of touched) this.#dirty.add(session);
   }
-
-  #takeOverall(event: CampaignEvent): void {
-    switch (event.kind) {
-      case 'plan-issued':
-      case 'plan-amended':
-        this.#planning.push(event);
-        this.#replan = true;
-        break;
-      case 'undone':
-        add(this.#undoing, event.data.target, event);
-        this.#touch(event.data.target);
-        break;
-      case 'reinstated':
-        add(this.#reinstating, event.data.target, event);
-        this.#touch(event.data.target);
-        break;
-      case 'contradiction-decided':
-        add(this.#decisions, event.data.about, event);
-        this.#touchDecided(event.data.about);
-        break;
-      default:
-        this.#overall.push(event);
-    }
-  }
-
-  /** Marks what depends on an event as to be reduced again; an event not yet here marks its session when it comes. */
-  #touch(id: string): void {
-    const target = this.#ids.get(id);
-    if (!target || !isKnown(target)) return;
-    const session = sessionOf(target);
-    if (session !== null) this.#dirty.add(session);
-    else if (target.kind === 'reinstated') this.#touch(target.data.target);
-    else if (target.kind === 'contradiction-decided') this.#touchDecided(target.data.about);
-  }
-
-  #touchDecided(about: string): void {
-    const [kind, place = ''] = about.split(':');
-    if (kind === 'two-plans') this.#replan = true;
-    else if (kind === 'specimen-twice')
-      for (const session of this.#loads.get(place)?.keys() ?? []) this.#dirty.add(session);
-    else this.#dirty.add(place.split('/')[0] ?? '');
-  }
-
-  #undone = (event: CampaignEvent): boolean => this.#undoing.has(event.id) && isUndoable(event);
-
-  #decisionsOn = (key: string): readonly Decision[] =>
-    inOrder((this.#decisions.get(key) ?? []).filter((event) => !this.#undone(event)));
-
-  #before = (a: CampaignEvent, b: CampaignEvent): boolean => inOrder([a, b])[0] === a;
-
-  #reinstatement = (ruin: string): Of<'reinstated'> | undefined =>
-    inOrder((this.#reinstating.get(ruin) ?? []).filter((event) => !this.#undone(event)))[0];
 
   /** Highest tick of any event taken in. */
   get tick(): number {
-    return this.#tick;
+    return this.#held.tick;
+  }
+
+  /** How many events it has taken in. */
+  get count(): number {
+    return this.#held.count;
   }
 
   /** The state of everything taken in so far; parts that did not change are the same objects as before. */
@@ -137,137 +104,155 @@ export class Replay {
     return this.#state;
   }
 
+  /** What must be supplied before an event can be applied; to be asked again after each supply. */
+  needs(event: Any): Needs {
+    const nothing = { sessions: [], event: null };
+    if (this.#cold.size === 0) return nothing;
+    if (!(this.#held.devices.get(event.device)?.continues(event.seq) ?? true)) return 'everything';
+    if (!isKnown(event)) return nothing;
+    const missing = this.#held.missingFor(event);
+    if (missing !== null && !this.#absent.has(missing)) return { sessions: [], event: missing };
+    const touched = this.#held.touchedBy(event, this.#sessionsOf);
+    if (touched === 'plan') return 'everything';
+    const codes = touched.flatMap((session) => this.#cold.get(session)?.codes ?? this.#codesIn(session));
+    if (event.kind === 'specimen-loaded') codes.push(event.data.specimen);
+    const wanted = new Set([...touched, ...codes.flatMap(this.#sessionsOf)]);
+    return { sessions: [...wanted].filter((session) => this.#cold.has(session)), event: null };
+  }
+
+  /** The events of a cold session. False: they say otherwise than the checkpoint, which must then not be used. */
+  supply(session: string, events: readonly CampaignEvent[]): boolean {
+    const cold = this.#cold.get(session);
+    if (!cold) return true;
+    this.#cold.delete(session);
+    this.#held.putBack(events, session);
+    this.#reduceOne(session, new Set());
+    this.#state = null;
+    const { head, runs } = this.part(session);
+    return runs === cold.runs && JSON.stringify(head) === JSON.stringify(cold.head);
+  }
+
+  /** An event that another one speaks of; null when the log does not have it. */
+  supplyEvent(id: string, event: Any | null): void {
+    if (event) this.#held.putBack([event], null);
+    else this.#absent.add(id);
+  }
+
+  #sessionsOf = (code: string): string[] => {
+    if (!this.#coldByCode) {
+      this.#coldByCode = new Map();
+      for (const [session, { codes }] of this.#cold)
+        for (const one of codes) this.#coldByCode.set(one, [...(this.#coldByCode.get(one) ?? []), session]);
+    }
+    const cold = (this.#coldByCode.get(code) ?? []).filter((session) => this.#cold.has(session));
+    return [...this.#places.sessionsOf(code), ...cold];
+  };
+
+  #codesIn(session: string): string[] {
+    const events = this.#held.sessions.get(session) ?? none;
+    return [...new Set(events.flatMap((event) => (event.kind === 'specimen-loaded' ? [event.data.specimen] : [])))];
+  }
+
+  #before = (a: CampaignEvent, b: CampaignEvent): boolean => inOrder([a, b])[0] === a;
+
+  #makePlan(): void {
+    this.#plan = reducePlan(inOrder(this.#held.planning), this.#held.spoken.decisionsOn, this.#before);
+    this.#planned = new Map(this.#plan.issued?.sessions.map((session) => [session.id, session]));
+  }
+
   #reduce(): CampaignState {
     if (this.#replan) {
-      this.#plan = reducePlan(inOrder(this.#planning), this.#decisionsOn, this.#before);
+      if (this.#cold.size > 0) throw new Error(`replay: expected all sessions' events, ${this.#cold.size} are cold`);
+      this.#makePlan();
       this.#reduced.clear();
-      this.#loads.clear();
-      this.#twice.clear();
-      this.#aside.clear();
-      this.#doubtful.clear();
-      this.#dirty = new Set(this.#plan.issued?.sessions.map(({ id }) => id));
+      this.#places.clear();
+      this.#dirty = new Set(this.#planned.keys());
       this.#replan = false;
     }
     const codes = new Set<string>();
     for (const session of this.#dirty) this.#reduceOne(session, codes);
     const again = new Set<string>();
-    for (const code of codes) this.#findTwice(code, again);
+    for (const code of codes) this.#places.find(code, again, this.#held.spoken.decisionsOn, this.#before);
     for (const session of again) this.#reduceOne(session, codes);
+    for (const session of [...this.#dirty, ...again]) if (this.#reduced.has(session)) this.#changed.add(session);
     this.#dirty.clear();
-    return this.#assemble();
+    return assembleState({
+      campaign: this.#campaign,
+      held: this.#held,
+      plan: this.#plan,
+      sessions: this.#reduced,
+      places: this.#places
+    });
   }
 
   #reduceOne(id: string, codes: Set<string>): void {
-    const plan = this.#plan.issued?.sessions.find((one) => one.id === id);
-    if (!plan || !this.#plan.issued) return;
-    const machine = this.#plan.issued.plan.machines.find((one) => one.id === plan.machine);
+    const plan = this.#planned.get(id);
+    const { issued, treatmentOf, dropped } = this.#plan;
+    if (!plan || !issued) return;
+    if (this.#cold.has(id)) throw new Error(`replay: expected the events of session ${id}, it is cold`);
+    const machine = issued.plan.machines.find((one) => one.id === plan.machine);
+    const { undone, decisionsOn, reinstatement } = this.#held.spoken;
     const around: Surroundings = {
-      undone: this.#undone,
-      decisionsOn: this.#decisionsOn,
+      undone,
+      decisionsOn,
+      reinstatement,
       before: this.#before,
-      reinstatement: this.#reinstatement,
-      aside: this.#aside,
-      doubtful: this.#doubtful,
-      treatmentOf: this.#plan.treatmentOf,
-      definitions: this.#plan.issued.plan.readings
+      aside: this.#places.aside,
+      doubtful: this.#places.doubtful,
+      treatmentOf,
+      definitions: issued.plan.readings
     };
-    const events = inOrder(this.#sessions.get(id) ?? none);
+    const events = inOrder(this.#held.sessions.get(id) ?? none);
     const inService = (slot: number): boolean => machine?.slots[slot]?.inService ?? true;
-    for (const claim of this.#reduced.get(id)?.claims ?? []) this.#loads.get(claim.data.specimen)?.delete(id);
-    for (const claim of this.#reduced.get(id)?.claims ?? []) codes.add(claim.data.specimen);
-    const reduced = reduceSession(plan, this.#plan.dropped.has(id), inService, events, around);
+    const before = this.#reduced.get(id)?.claims ?? [];
+    const reduced = reduceSession(plan, dropped.has(id), inService, events, around);
     this.#reduced.set(id, reduced);
-    for (const claim of reduced.claims) {
-      codes.add(claim.data.specimen);
-      let places = this.#loads.get(claim.data.specimen);
-      if (!places) this.#loads.set(claim.data.specimen, (places = new Map()));
-      places.set(id, [...(places.get(id) ?? []), claim]);
-    }
+    this.#places.replace(id, before, reduced.claims);
+    for (const claim of [...before, ...reduced.claims]) codes.add(claim.data.specimen);
   }
 
-  /** One specimen cannot be in two places: finds it, and which sessions must be reduced again for what was decided. */
-  #findTwice(code: string, again: Set<string>): void {
-    const loads = inOrder([...(this.#loads.get(code)?.values() ?? [])].flat());
-    const key = `specimen-twice:${code}`;
-    const samePlace = (a: Of<'specimen-loaded'>, b: Of<'specimen-loaded'>): boolean =>
-      a.data.session === b.data.session && a.data.slot === b.data.slot;
-    const { winner, contradiction } = resolve(
-      { key, kind: 'specimen-twice', session: null, slot: null, reading: null },
-      loads,
-      samePlace,
-      this.#decisionsOn,
-      this.#before
-    );
-    if (contradiction) this.#twice.set(code, contradiction);
-    else this.#twice.delete(code);
-    for (const load of loads) {
-      const aside = contradiction !== null && winner !== null && !samePlace(load, winner);
-      const doubtful = contradiction !== null && winner === null;
-      if (aside !== this.#aside.has(load.id) || doubtful !== this.#doubtful.has(load.id)) again.add(load.data.session);
-      set(this.#aside, load.id, aside);
-      set(this.#doubtful, load.id, doubtful);
-    }
+  /** Sessions that have changed since `settle` was last called; their parts of the last checkpoint are out of date. */
+  get changed(): ReadonlySet<string> {
+    void this.state;
+    return this.#changed;
   }
 
-  #assemble(): CampaignState {
-    const { issued, issuedBy, amendments } = this.#plan;
-    const overall = inOrder(this.#overall);
-    const created = overall.find((event) => event.kind === 'campaign-created');
-    const standing = overall.filter((event) => !this.#undone(event));
-    const reduced = issued?.sessions.flatMap(({ id }) => this.#reduced.get(id) ?? []) ?? [];
-    const sessions: SessionState[] = reduced.map(({ state }) => state);
-    const devices = [...this.#devices.values()].sort((a, b) => (a.device < b.device ? -1 : 1));
-    const twice = [...this.#twice].sort(([a], [b]) => (a < b ? -1 : 1)).map(([, one]) => one);
+  /** The part of a session that has changed is kept. */
+  settle(session: string): void {
+    this.#changed.delete(session);
+  }
+
+  /** One session's part of a checkpoint. */
+  part(id: string): SessionCheckpoint {
+    const reduced = this.#reduced.get(id);
+    if (!reduced) throw new Error(`part: expected a planned session, got ${id}`);
+    const { runs, plan: _plan, ...state } = reduced.state;
+    const { contradictions, strangers } = reduced;
+    const head = { state, tally: tallyOf(reduced.state), contradictions, strangers, codes: this.#codesIn(id) };
+    return { head, runs: packRuns(runs), events: this.#held.sessions.get(id) ?? none };
+  }
+
+  /** The rest of a checkpoint, as plain values. */
+  core(): CoreCheckpoint {
+    void this.state;
+    const { devices, overall, planning, unknown, spoken, sessions, count, tick } = this.#held;
     return {
-      id: this.#campaign,
-      title: issued?.plan.title || created?.data.title || '',
-      demo: created?.data.demo ?? false,
-      created: created ? markOf(created) : null,
-      issued,
-      plan: issued?.plan ?? null,
-      issuedBy,
-      amendments,
-      sessions,
-      shifts: reduceShifts(standing),
-      notes: standing.flatMap((event) => (event.kind === 'noted' ? [noteOf(event)] : [])),
-      contradictions: [...this.#plan.contradictions, ...reduced.flatMap((one) => one.contradictions), ...twice],
-      flags: [...devices.flatMap((log) => log.flags), ...this.#ownFlags(reduced)],
-      notUnderstood: inOrder(this.#unknown),
-      devices: devices.map((log) => log.state),
-      events: this.#ids.size
+      campaign: this.#campaign,
+      events: count,
+      tick,
+      devices: [...devices.values()].map((log) => log.checkpoint),
+      overall,
+      planning,
+      unknown,
+      speaking: spoken.all,
+      absent: spoken.targets.flatMap(([id]) => (this.#held.has(id) ? [] : [id])),
+      nowhere: [...sessions].flatMap(([session, events]) => (this.#planned.has(session) ? [] : events)),
+      twice: this.#places.contradictions,
+      aside: [...this.#places.aside],
+      doubtful: [...this.#places.doubtful]
     };
-  }
-
-  #ownFlags(reduced: readonly ReducedSession[]): RecordFlag[] {
-    const flag = (kind: RecordFlag['kind'], event: Any, detail: string): RecordFlag => ({
-      kind,
-      device: event.device,
-      event: event.id,
-      detail
-    });
-    const unknown = inOrder(this.#unknown).map((event) => flag('not-understood', event, event.kind));
-    const strangers = reduced.flatMap(({ strangers: list }) =>
-      list.map((event) => flag('unknown-specimen', event, event.data.specimen))
-    );
-    const targets = [...this.#undoing, ...this.#reinstating].flatMap(([target, events]) =>
-      this.#ids.has(target) ? [] : events.map((event) => flag('orphan', event, target))
-    );
-    const nowhere = [...this.#sessions].flatMap(([session, events]) =>
-      this.#reduced.has(session) ? [] : events.map((event) => flag('orphan', event, session))
-    );
-    const byEvent = (a: RecordFlag, b: RecordFlag): number => ((a.event ?? '') < (b.event ?? '') ? -1 : 1);
-    return [...unknown, ...strangers, ...[...targets, ...nowhere].sort(byEvent)];
   }
 }
-
-const add = <T>(map: Map<string, T[]>, key: string, value: T): void => {
-  map.set(key, [...(map.get(key) ?? []), value]);
-};
-
-const set = (where: Set<string>, what: string, present: boolean): void => {
-  if (present) where.add(what);
-  else where.delete(what);
-};
 
 /** The state that a set of events describes. Cost n log n. */
 export function replay(events: Iterable<Any>, campaign?: string): CampaignState {

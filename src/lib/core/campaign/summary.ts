@@ -1,4 +1,4 @@
-import type { CampaignState } from './state.ts';
+import type { CampaignState, SessionState } from './state.ts';
 
 /** What a list of campaigns shows of one; derived from the state and written with every event. */
 export interface CampaignSummary {
@@ -20,10 +20,33 @@ export interface CampaignSummary {
   undecided: number;
 }
 
-/** The summary of a campaign as this device sees it. Cost: the number of readings. */
+/** How many runs a session has and how many of them are done. */
+export interface RunTally {
+  runs: number;
+  done: number;
+}
+
+/** A session's state does not change once it is made; it is counted once. */
+const tallies = new WeakMap<SessionState, RunTally>();
+
+export function tallyOf(session: SessionState): RunTally {
+  let tally = tallies.get(session);
+  if (!tally) {
+    const done = session.runs.filter(
+      (run) => run.ruined !== null || run.readings.every((r) => r.current !== null || r.missing !== null)
+    ).length;
+    tallies.set(session, (tally = { runs: session.runs.length, done }));
+  }
+  return tally;
+}
+
+/** Says how a session whose runs have not been looked at counts. */
+export const rememberTally = (session: SessionState, tally: RunTally): void => void tallies.set(session, tally);
+
+/** The summary of a campaign as this device sees it. Cost: the number of sessions, and the readings of those that are new. */
 export function summaryOf(state: CampaignState, device: string): CampaignSummary {
   const sessions = state.sessions.filter(({ status }) => status !== 'dropped');
-  const runs = sessions.flatMap((session) => session.runs);
+  const tally = sessions.map(tallyOf);
   return {
     id: state.id,
     title: state.title,
@@ -32,10 +55,8 @@ export function summaryOf(state: CampaignState, device: string): CampaignSummary
     issued: state.issued !== null,
     sessions: sessions.length,
     sessionsClosed: sessions.filter(({ status }) => status === 'closed').length,
-    runs: runs.length,
-    runsDone: runs.filter(
-      (run) => run.ruined !== null || run.readings.every((r) => r.current !== null || r.missing !== null)
-    ).length,
+    runs: tally.reduce((sum, { runs }) => sum + runs, 0),
+    runsDone: tally.reduce((sum, { done }) => sum + done, 0),
     events: state.events,
     notExported: state.devices.find((one) => one.device === device)?.sinceExport ?? 0,
     undecided: state.contradictions.filter(({ decided }) => decided === null).length
