@@ -59,7 +59,7 @@ export function compareTreatments(
 }
 
 /** Differences looked up in the lines of the pairs. */
-function differenceSource(
+export function differenceSource(
   treatments: number,
   means: readonly MeanLine[],
   pairs: readonly PairLine[]

@@ -1,19 +1,21 @@
-import { PiecewiseChebyshev } from '../piecewise-chebyshev.ts';
 import { largestCorrelatedUpper, type QuasiMonteCarlo } from './largest-correlated.ts';
-import { largestOneFactor, type BothTails, type Sides } from './largest-one-factor.ts';
+import { largestOneFactor, type Sides } from './largest-one-factor.ts';
 import { largestNearProduct } from './near-product.ts';
 import { fitOneFactor } from './one-factor.ts';
 import { residualFactor } from './residual-factor.ts';
 import { ScaledMaximum } from './scaled-maximum.ts';
 import { tUpper, tUpperQuantile } from './student-t.ts';
+import { logOddsOf, tailsAround, type LogOdds } from './tail-around.ts';
 
 export type { Sides } from './largest-one-factor.ts';
 
 /** Below this residual correlations are rounding, and the product form counts as exact. */
 const EXACT = 1e-10;
-/** Beyond this all correlations have lost their influence on the tail, but for rounding. */
-const FAR = 9;
-const NEAR = 5;
+/** Up to this residual correlation the expansion is close. */
+const NEARLY = 0.15;
+/** What is not exact is tabulated with fewer digits: its own error is above 1e-7. */
+const COARSE = 1.5;
+const APPROXIMATE = 11;
 
 /** The largest of several correlated t statistics with one common error estimate. */
 export interface LargestT {
@@ -41,8 +43,8 @@ export const USUAL_EFFORT: QuasiMonteCarlo = { seed: 1, shifts: 8, points: 127 }
  * @param correlation row-major m×m
  * @param sides `two` for the largest absolute value
  * @param effort seed and size of the quasi-Monte Carlo integration, or `expand` for the quick expansion
- * Cost: milliseconds by quadrature and expansion; 0.2 s for m = 6 and 1.5 s for m = 19 by quasi-Monte Carlo; then
- * microseconds a question.
+ * Cost: some 20 ms by quadrature and expansion; with 61 points 0.2 s for m = 6 and 0.4 s for m = 19 by quasi-Monte Carlo;
+ * then microseconds a question.
  * Source: C. W. Dunnett (1955), JASA 50, 1096–1121; Genz & Bretz (2009).
  * Checked by: test/core/numerics/distributions/dunnett.test.ts, tables.test.ts
  */
@@ -53,25 +55,22 @@ export function largestT(
   effort: QuasiMonteCarlo | 'expand' = USUAL_EFFORT
 ): LargestT {
   const { loadings, residual } = fitOneFactor(correlation, m);
-  const seen = new Map<number, BothTails>();
-  const product = (c: number): BothTails => {
-    let tails = seen.get(c);
-    if (!tails) seen.set(c, (tails = largestOneFactor(c, loadings, sides)));
-    return tails;
-  };
   const start = (alpha: number, df: number) =>
     tUpperQuantile(Math.min(0.49, alpha / (sides === 'two' ? 2 * m : m)), df);
-  const exact = scaled((c) => product(c).upper, m, sides);
   if (residual < EXACT) {
+    const exact = scaled((c) => largestOneFactor(c, loadings, sides).upper, m, sides);
     return {
       method: 'quadrature',
       upper: (q, df) => ({ p: exact.upper(q, df), error: 0 }),
       quantile: (alpha, df) => exact.quantile(alpha, df, start(alpha, df))
     };
   }
+  const product = remembered((c) => logOddsOf(largestOneFactor(c, loadings, sides, COARSE)));
+  const wide = { near: sides === 'two' ? 15 : 25, far: 5 };
+  const orders = tailsAround(product, largestNearProduct(correlation, loadings, sides), 2, sides, wide);
+  const approximate = (odds: LogOdds) => scaled((c) => 1 / (1 + Math.exp(-odds(c))), m, sides, APPROXIMATE);
   if (effort === 'expand') {
-    const orders = largestNearProduct(correlation, loadings, sides);
-    const [first, second] = aroundProduct(product, orders, 2, sides).map((tail) => scaled(tail, m, sides));
+    const [first, second] = orders.map(approximate);
     return {
       method: 'expansion',
       upper: (q, df) => {
@@ -83,7 +82,9 @@ export function largestT(
     };
   }
   const simulate = largestCorrelatedUpper(residualFactor(correlation, m, loadings), sides, effort);
-  const replicates = aroundProduct(product, simulate, effort.shifts, sides).map((tail) => scaled(tail, m, sides));
+  // Around the expansion there is little left to tabulate, unless the correlations are far from any product.
+  const [base, degrees] = residual < NEARLY ? [orders[1]!, { near: 9, far: 2 }] : [product, wide];
+  const replicates = tailsAround(base, simulate, effort.shifts, sides, degrees).map(approximate);
   return {
     method: 'quasi-monte-carlo',
     upper: (q, df) => {
@@ -96,40 +97,23 @@ export function largestT(
   };
 }
 
+function remembered(odds: LogOdds): LogOdds {
+  const known = new Map<number, number>();
+  return (c) => {
+    let value = known.get(c);
+    if (value === undefined) known.set(c, (value = odds(c)));
+    return value;
+  };
+}
+
 function mean(values: readonly number[]): number {
   return values.reduce((sum, v) => sum + v, 0) / values.length;
 }
 
-function scaled(tail: (c: number) => number, m: number, sides: Sides): ScaledMaximum {
+function scaled(tail: (c: number) => number, m: number, sides: Sides, degree?: number): ScaledMaximum {
   const from = sides === 'two' ? 0 : -10;
-  return new ScaledMaximum({ tail, from, to: 38, decay: 0.5, steepness: 2 + 2 * Math.sqrt(2 * Math.log(2 * m)) });
-}
-
-/**
- * Several approximate tails, tabulated around that of the product form: its odds times their odds ratio. The logarithm
- * of that ratio is smooth in c from the middle of the box to the far tail, so that few c are enough.
- */
-function aroundProduct(
-  product: (c: number) => BothTails,
-  approximate: (c: number) => readonly BothTails[],
-  count: number,
-  sides: Sides
-): ((c: number) => number)[] {
-  const logOdds = ({ upper, inside }: BothTails) => Math.log(upper) - Math.log(inside);
-  const known = new Map<number, readonly BothTails[]>();
-  const logRatio = (c: number, which: number) => {
-    let tails = known.get(c);
-    if (!tails) known.set(c, (tails = approximate(c)));
-    return logOdds(tails[which]!) - logOdds(product(c));
-  };
-  const from = sides === 'two' ? 0 : -5;
-  const degree = sides === 'two' ? 15 : 25;
-  return Array.from({ length: count }, (_, which) => {
-    const near = new PiecewiseChebyshev((c) => logRatio(c, which), from, NEAR, NEAR - from, degree);
-    const far = new PiecewiseChebyshev((c) => logRatio(c, which), NEAR, FAR, FAR - NEAR, 5);
-    const ratio = (c: number) => (c < NEAR ? near.at(Math.max(from, c)) : far.at(Math.min(FAR, c)));
-    return (c: number) => 1 / (1 + Math.exp(-logOdds(product(c)) - ratio(c)));
-  });
+  const steepness = 2 + 2 * Math.sqrt(2 * Math.log(2 * m));
+  return new ScaledMaximum({ tail, from, to: 38, decay: 0.5, steepness }, degree);
 }
 
 /**

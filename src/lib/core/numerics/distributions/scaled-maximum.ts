@@ -30,12 +30,13 @@ export class ScaledMaximum {
   readonly #statistic: NormalStatistic;
   readonly #logTail: PiecewiseChebyshev;
 
-  constructor(statistic: NormalStatistic) {
+  /** @param degree of the table's pieces; 15 keeps 9 digits of the tail and more, 11 at least 5 */
+  constructor(statistic: NormalStatistic, degree = DEGREE) {
     this.#statistic = statistic;
     const { tail, from, to } = statistic;
     // Where the tail underflows it is held at the smallest double, so that the last piece stays finite.
     const logTail = (c: number) => Math.log(Math.max(tail(c), Number.MIN_VALUE));
-    this.#logTail = new PiecewiseChebyshev(logTail, from, to, PIECE, DEGREE);
+    this.#logTail = new PiecewiseChebyshev(logTail, from, to, PIECE, degree);
   }
 
   /** P(statistic / s > q); df above 0, fractional or Infinity. Cost: some 60 table look-ups. */
