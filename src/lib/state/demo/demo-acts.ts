@@ -138,7 +138,12 @@ function recordSession(session: PlannedSession, i: number, write: Write, random:
         source: 'keyboard',
         readAt: null,
         raised: odd
-          ? [{ check: 'unexpected', said: 'Loss of film thickness 21.5 µm, expected 2 to 16 µm. Look again.' }]
+          ? [
+              {
+                check: 'surprise',
+                said: 'Loss of film thickness comes to 12.40 µm. The readings so far predict 5.1 to 9.9 µm here.'
+              }
+            ]
           : [],
         because: odd ? 'Weighed twice, same mass; film looks whole.' : null
       },
@@ -151,8 +156,8 @@ function recordSession(session: PlannedSession, i: number, write: Write, random:
 
   runs.forEach(({ treatment, slot }, at) => {
     const truth = demoTruth[demoPlan.treatments.findIndex((t) => t.id === treatment)] ?? 0;
-    const odd = i === 4 && at === 1;
-    const loss = odd ? 21.5 : Math.max(0.5, truth + offset + 0.5 * normal(random));
+    const odd = i === 4 && at === 0;
+    const loss = odd ? 12.4 : Math.max(0.5, truth + offset + 0.4 * normal(random));
     if (i === 6 && at === 2) {
       write(
         'reading-missing',
@@ -168,7 +173,7 @@ function recordSession(session: PlannedSession, i: number, write: Write, random:
       {
         about: 'run',
         session: id,
-        slot: runs[1]?.slot ?? 0,
+        slot: runs[0]?.slot ?? 0,
         text: 'Foam stood higher on this track than on the others.'
       },
       1

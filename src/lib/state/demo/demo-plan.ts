@@ -101,4 +101,4 @@ export const demoPlan: Plan = {
 };
 
 /** Invented true loss of film of each recipe, µm, in the order of the plan. */
-export const demoTruth = [6.4, 5.1, 9.2, 6.0, 8.3, 7.1, 5.6, 4.6, 5.0];
+export const demoTruth = [7.4, 5.6, 11.6, 7.0, 10.4, 8.6, 5.9, 4.1, 5.2];
