@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { checkCode } from '#lib/core/design/specimen-codes.ts';
-import { repeatOf } from '#lib/state/plan/amend.ts';
+import { extraSession, repeatOf } from '#lib/state/plan/amend.ts';
 import { campaign, loadedRun, session } from '../../core/campaign/wall-paint.ts';
 
 const state = () => campaign([session(1, [loadedRun('s1', 0, 'A-1'), loadedRun('s1', 1, 'B-1')]), session(2, [])]);
@@ -30,5 +30,19 @@ describe('repeatOf(state, session, withSpares, seed)', () => {
 
   test('repeats nothing that is not there', () => {
     expect(repeatOf(state(), 's9', true, 'seed')).toBeNull();
+  });
+});
+
+describe('extraSession(state, treatments, seed)', () => {
+  test('puts every treatment once into a slot in service, spare specimens first, last in the loading order', () => {
+    const added = extraSession(state(), ['a', 'c'], 'seed');
+    expect(added).toMatchObject({ id: 's3', number: 3, repeats: null, machine: 'm' });
+    expect(added?.slots.map((slot) => slot?.treatment).sort()).toEqual(['a', 'c']);
+    expect(added?.slots.find((slot) => slot?.treatment === 'a')?.specimen).toBe('A-9');
+    expect(added).toEqual(extraSession(state(), ['a', 'c'], 'seed'));
+  });
+
+  test('leaves no treatment out silently: null where no machine has slots for all', () => {
+    expect(extraSession(state(), ['a', 'b', 'c'], 'seed')).toBeNull();
   });
 });

@@ -28,20 +28,21 @@ export function moorePenrose(c: Float64Array, t: number): Float64Array | undefin
       else return undefined;
     }
   }
-  // L⁻¹ below the diagonal, then (L Lᵀ)⁻¹ = L⁻ᵀ L⁻¹.
+  // X = L⁻ᵀ in rows, so that every sum runs along a row of both; then (L Lᵀ)⁻¹ = X Xᵀ.
+  const x = new Float64Array(t * t);
   for (let j = 0; j < t; j++) {
-    l[j * t + j] = 1 / l[j * t + j]!;
+    x[j * t + j] = 1 / l[j * t + j]!;
     for (let i = j + 1; i < t; i++) {
       let sum = 0;
-      for (let m = j; m < i; m++) sum += l[i * t + m]! * l[m * t + j]!;
-      l[i * t + j] = -sum / l[i * t + i]!;
+      for (let m = j; m < i; m++) sum += l[i * t + m]! * x[j * t + m]!;
+      x[j * t + i] = -sum / l[i * t + i]!;
     }
   }
-  const inverse = new Float64Array(t * t);
+  const inverse = l;
   for (let i = 0; i < t; i++) {
     for (let j = 0; j <= i; j++) {
       let sum = -1 / (s * t);
-      for (let m = i; m < t; m++) sum += l[m * t + i]! * l[m * t + j]!;
+      for (let m = i; m < t; m++) sum += x[i * t + m]! * x[j * t + m]!;
       inverse[i * t + j] = inverse[j * t + i] = sum;
     }
   }

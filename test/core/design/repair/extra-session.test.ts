@@ -60,4 +60,20 @@ describe('bestExtraSession', () => {
       }
     }
   });
+
+  test('bestExtraSession(...) of a large design in parts comes by exchanges too, priced exactly', () => {
+    // Two rings of thirty pairs: no session of the design holds treatments of both.
+    const rings = all(60).map((i) => [i, i < 30 ? (i + 1) % 30 : 30 + ((i + 1) % 30)]);
+    const extra = bestExtraSession(rings, 60, all(60), 10)!;
+    expect(extra.exhaustive).toBe(false);
+    const [session] = extra.sessions;
+    expect(Math.abs(aValue([...rings, session!], 60) / extra.aValue - 1)).toBeLessThan(1e-12);
+    for (const out of session!) {
+      for (const i of [0, 7, 23, 41]) {
+        if (session!.includes(i)) continue;
+        const other = session!.map((n) => (n === out ? i : n));
+        expect(aValue([...rings, other], 60)).toBeGreaterThan(extra.aValue * (1 - 1e-3));
+      }
+    }
+  });
 });

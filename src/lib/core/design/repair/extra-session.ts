@@ -14,6 +14,9 @@ export interface ExtraSession {
   exhaustive: boolean;
 }
 
+/** The A-value of a design with one more session; infinite while some difference cannot be estimated. */
+export type SessionPricing = (session: readonly number[]) => number;
+
 /** Elementary operations that an exhaustive answer may take. */
 const EXHAUSTIVE = 1.2e9;
 const TIE = 1e-9;
@@ -83,12 +86,14 @@ export function fallByExtraSession(M: Float64Array, Q: Float64Array, t: number, 
  * every difference estimable (more parts than slots, or a part without a specimen).
  *
  * Every session is priced where that is feasible; else one is built treatment by treatment and improved by exchanges
- * until none helps. A design that is not connected is refitted for each session that touches all its parts.
+ * until none helps. A design that is not connected is refitted for each session that touches all its parts, as long as every
+ * one is priced; a search there weighs sessions by faint ties between the parts and refits only what it found.
  *
  * @param blocks sessions with what was kept of them
  * @param treatments number of treatments t
  * @param available treatments that still have specimens
  * @param k slots of the session
+ * @param priced what `sessionPricing(blocks, treatments)` gave, where it is known already
  *
  * **Checked by** test/core/design/repair/extra-session.test.ts
  */
@@ -96,33 +101,41 @@ export function bestExtraSession(
   blocks: readonly (readonly number[])[],
   treatments: number,
   available: readonly number[],
-  k: number
+  k: number,
+  priced?: SessionPricing | null
 ): ExtraSession | null {
   const t = treatments;
   const size = Math.min(k, available.length);
   if (size < 2) return null;
   const kept = blocks.filter((block) => block.length > 0);
   const parts = connectedParts(kept, t);
-  const partOf = new Int32Array(t);
-  parts.forEach((part, at) => part.forEach((i) => (partOf[i] = at)));
   const reachable = parts.every((part) => part.some((i) => available.includes(i)));
   if (parts.length > size || !reachable) return null;
 
-  const price =
-    parts.length === 1
-      ? pricing(kept, t)
-      : (session: readonly number[]) => {
-          const touched = new Set(session.map((i) => partOf[i]!));
-          return touched.size < parts.length ? Infinity : aValue([...kept, session], t);
-        };
-  const each = parts.length === 1 ? 8 * size ** 3 : t ** 3;
-  const exhaustive = combinationCount(available.length, size) * each <= EXHAUSTIVE;
   const sorted = [...available].sort((a, b) => a - b);
-  return exhaustive ? cheapest(sorted, size, price) : improved(sorted, size, parts, price);
+  const joined = parts.length === 1;
+  const exact = joined
+    ? (priced ?? sessionPricing(kept, t)!)
+    : joining(parts, t, (session) => aValue([...kept, session], t));
+  const each = joined ? 8 * size ** 3 : t ** 3;
+  if (combinationCount(available.length, size) * each <= EXHAUSTIVE) return cheapest(sorted, size, exact);
+  const found = improved(sorted, size, parts, joined ? exact : joining(parts, t, weaklyTied(kept, parts, t)));
+  return found && { ...found, aValue: exact(found.sessions[0]!) };
 }
 
-function pricing(kept: readonly (readonly number[])[], t: number): (session: readonly number[]) => number {
-  const M = moorePenrose(informationMatrix(kept, t), t)!;
+/**
+ * Returns the function that prices one more session of a connected design: its A-value with it, without a refit; null when the
+ * design is not connected.
+ *
+ * Cost: t³ once, 8 k³ a session.
+ * **Checked by** test/core/design/repair/extra-session.test.ts
+ */
+export function sessionPricing(kept: readonly (readonly number[])[], t: number): SessionPricing | null {
+  const M = moorePenrose(informationMatrix(kept, t), t);
+  return M ? pricing(M, t) : null;
+}
+
+function pricing(M: Float64Array, t: number): SessionPricing {
   const Q = new Float64Array(t * t);
   let now = 0;
   for (let i = 0; i < t; i++) {
@@ -136,11 +149,45 @@ function pricing(kept: readonly (readonly number[])[], t: number): (session: rea
   return (session) => now - fallByExtraSession(M, Q, t, session);
 }
 
-function cheapest(
-  available: readonly number[],
-  size: number,
-  price: (session: readonly number[]) => number
-): ExtraSession | null {
+/** A session that leaves a part untouched leaves the design in parts. */
+function joining(parts: readonly (readonly number[])[], t: number, price: SessionPricing): SessionPricing {
+  const partOf = new Int32Array(t);
+  parts.forEach((part, at) => part.forEach((i) => (partOf[i] = at)));
+  return (session) => (new Set(session.map((i) => partOf[i]!)).size < parts.length ? Infinity : price(session));
+}
+
+/** Weight of the ties between parts, as a share of the mean diagonal of C. */
+const WEAK = 1e-3;
+
+/**
+ * Prices sessions of a design in parts as if faint ties held the parts together: enough to tell sessions apart without a refit
+ * for each; whoever uses it prices what is found exactly.
+ */
+function weaklyTied(
+  kept: readonly (readonly number[])[],
+  parts: readonly (readonly number[])[],
+  t: number
+): SessionPricing {
+  const c = informationMatrix(kept, t);
+  let trace = 0;
+  for (let i = 0; i < t; i++) trace += c[i * t + i]!;
+  // Every treatment of a part is tied to every one of the first, so that none of them is preferred.
+  const [first, ...others] = parts;
+  for (const part of others) {
+    const weight = (WEAK * trace) / (t * part.length * first!.length);
+    for (const i of part) {
+      for (const l of first!) {
+        c[i * t + i]! += weight;
+        c[l * t + l]! += weight;
+        c[i * t + l]! -= weight;
+        c[l * t + i]! -= weight;
+      }
+    }
+  }
+  return pricing(moorePenrose(c, t)!, t);
+}
+
+function cheapest(available: readonly number[], size: number, price: SessionPricing): ExtraSession | null {
   let least = Infinity;
   let sessions: number[][] = [];
   const at = Array.from({ length: size }, (_, n) => n);
@@ -164,7 +211,7 @@ function improved(
   available: readonly number[],
   size: number,
   parts: readonly (readonly number[])[],
-  price: (session: readonly number[]) => number
+  price: SessionPricing
 ): ExtraSession | null {
   const needed = parts.length > 1 ? parts.map((part) => part.find((i) => available.includes(i))!) : [];
   let session = [...needed, ...available.filter((i) => !needed.includes(i))].slice(0, size);

@@ -2,7 +2,7 @@ import { aValue, pairVariance } from '../a-value.ts';
 import { connectedParts } from '../connected-parts.ts';
 import { informationMatrix } from '../information-matrix.ts';
 import { moorePenrose } from '../moore-penrose.ts';
-import { bestExtraSession } from './extra-session.ts';
+import { bestExtraSession, sessionPricing } from './extra-session.ts';
 
 export interface RepairRequest {
   /** Number of treatments t. */
@@ -57,8 +57,12 @@ export function planRepair({ treatments: t, planned, kept, slots, specimens }: R
   const finite = (value: number): number | null => (value === Infinity ? null : value);
   const available = Array.from({ length: t }, (_, i) => i).filter((i) => left(i) >= 1);
 
-  const options: RepairOption[] = [{ kind: 'leave', aValue: finite(aValue(now, t)), runs: 0 }];
-  const extra = bestExtraSession(now, t, available, slots);
+  const before = designOf(planned, t);
+  const after = designOf(now, t);
+  const priced = after.aValue === Infinity ? null : sessionPricing(now, t);
+
+  const options: RepairOption[] = [{ kind: 'leave', aValue: finite(after.aValue), runs: 0 }];
+  const extra = bestExtraSession(now, t, available, slots, priced);
   if (extra) {
     options.push({
       kind: 'extra',
@@ -76,54 +80,60 @@ export function planRepair({ treatments: t, planned, kept, slots, specimens }: R
       kind: 'rerun',
       session,
       treatments: [...block],
-      aValue: finite(aValue([...now, block], t)),
+      aValue: finite(priced ? priced(block) : joins(after.parts, block) ? aValue([...now, block], t) : Infinity),
       runs: block.length,
       possible: block.every((i) => left(i) >= 1)
     });
   });
   options.sort((a, b) => (a.aValue ?? Infinity) - (b.aValue ?? Infinity));
   return {
-    plannedAValue: aValue(planned, t),
-    aValue: finite(aValue(now, t)),
-    parts: connectedParts(now, t),
-    pairs: pairsOf(planned, now, t),
+    plannedAValue: before.aValue,
+    aValue: finite(after.aValue),
+    parts: after.parts,
+    pairs: pairsOf(before, after, t),
     options
   };
 }
 
-function pairsOf(
-  planned: readonly (readonly number[])[],
-  now: readonly (readonly number[])[],
-  t: number
-): RepairReport['pairs'] {
-  const before = partwiseInverse(planned, t);
-  const after = partwiseInverse(now, t);
+const joins = (parts: readonly (readonly number[])[], block: readonly number[]): boolean =>
+  parts.every((part) => part.some((i) => block.includes(i)));
+
+interface Design {
+  parts: number[][];
+  /** Infinite while it is in parts. */
+  aValue: number;
+  /** Variance of a difference in units of σ²; null between parts. */
+  variance: (a: number, b: number) => number | null;
+}
+
+function pairsOf(before: Design, after: Design, t: number): RepairReport['pairs'] {
   const pairs: RepairReport['pairs'] = [];
-  for (let a = 0; a < t; a++) {
-    for (let b = a + 1; b < t; b++) {
-      const variance = after(a, b);
-      pairs.push({ a, b, planned: before(a, b) ?? Infinity, now: variance });
-    }
-  }
+  for (let a = 0; a < t; a++)
+    for (let b = a + 1; b < t; b++)
+      pairs.push({ a, b, planned: before.variance(a, b) ?? Infinity, now: after.variance(a, b) });
   return pairs;
 }
 
-/** Variance of a difference inside a connected part, null between parts. */
-function partwiseInverse(blocks: readonly (readonly number[])[], t: number): (a: number, b: number) => number | null {
+/** Each connected part with its own Moore–Penrose inverse. */
+function designOf(blocks: readonly (readonly number[])[], t: number): Design {
   const parts = connectedParts(blocks, t);
   const partOf = new Int32Array(t);
   const placeOf = new Int32Array(t);
-  const inverses = parts.map((part, at) => {
+  parts.forEach((part, at) =>
     part.forEach((i, place) => {
       partOf[i] = at;
       placeOf[i] = place;
-    });
-    const inside = blocks.filter((block) => block.length > 0 && part.includes(block[0]!));
-    const renumbered = inside.map((block) => block.map((i) => placeOf[i]!));
-    return moorePenrose(informationMatrix(renumbered, part.length), part.length);
-  });
-  return (a, b) => {
+    })
+  );
+  const own = parts.map((): number[][] => []);
+  for (const block of blocks) if (block.length > 0) own[partOf[block[0]!]!]!.push(block.map((i) => placeOf[i]!));
+  const inverses = parts.map((part, at) => moorePenrose(informationMatrix(own[at]!, part.length), part.length));
+  const variance: Design['variance'] = (a, b) => {
     const inverse = partOf[a] === partOf[b] ? inverses[partOf[a]!] : undefined;
     return inverse ? pairVariance(inverse, parts[partOf[a]!]!.length, placeOf[a]!, placeOf[b]!) : null;
   };
+  const whole = parts.length === 1 ? inverses[0] : undefined;
+  let trace = 0;
+  if (whole) for (let i = 0; i < t; i++) trace += whole[i * t + i]!;
+  return { parts, aValue: whole ? (2 * trace) / (t - 1) : Infinity, variance };
 }

@@ -222,9 +222,17 @@ export const layers: typeof en = {
   repair: {
     title: 'Reparatur',
     nothing: 'Nichts ist verloren: jeder geplante Lauf zählt oder steht noch aus.',
-    finding: (lost, best) => `${lost} verloren. Günstigste Abhilfe: ${best}`,
+    finding: (lost, best) => `${lost} verloren. Am meisten hilft: ${best}`,
     loss: (now, planned) => `Standardfehler eines Unterschieds jetzt ${now}, geplant ${planned}.`,
+    lost: (lost, more) => `${lost} verloren. ${more}`.trim(),
     computing: 'Die beste zusätzliche Belegung wird gesucht …',
+    notComputed:
+      'Was den Verlust ausgleichen würde, ließ sich hier nicht berechnen. Der Verlust steht; nichts wurde geändert.',
+    hit: 'Paare, die am meisten verloren haben',
+    pair: 'Paar',
+    seNow: 'Standardfehler jetzt',
+    sePlanned: 'geplant',
+    notEstimable: 'nicht mehr vergleichbar',
     choice: 'Wahl',
     price: 'Preis',
     gain: 'Standardfehler eines Unterschieds danach',
