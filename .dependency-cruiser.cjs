@@ -72,8 +72,8 @@ module.exports = {
     only(
       'workers-on-core',
       'workers/',
-      'workers/|core/|formula/',
-      'A worker is a thin adapter around a core function.'
+      'workers/|core/|formula/|storage/',
+      'A worker is a thin adapter around a core function; it may write what it computed through storage.'
     ),
     only(
       'state-below-screens',

@@ -7,8 +7,8 @@ import { canonicalJson, sealOf } from '#lib/core/campaign/seal.ts';
 import type { CampaignEvent } from '#lib/core/campaign/event.ts';
 import { Connection } from '#lib/storage/connection.ts';
 import { draftsOf, putDraft } from '#lib/storage/drafts.ts';
-import { append, load, takeIn } from '#lib/storage/journal.ts';
-import { campaign, deviceA, deviceB, Recorder } from '../core/campaign/story.ts';
+import { append, load } from '#lib/storage/journal.ts';
+import { campaign, deviceA, Recorder } from '../core/campaign/story.ts';
 
 let connection: Connection;
 let name = 0;
@@ -76,32 +76,6 @@ describe('append', () => {
     expect((await append(connection, sealed(a, second), summary(a.events))).ok).toBe(true);
     const loaded = await load(connection, campaign);
     expect(loaded.ok && loaded.value.events).toHaveLength(2);
-  });
-});
-
-describe('takeIn', () => {
-  it('takeIn(events) keeps forks beside the first and other bytes of a known id aside', async () => {
-    const a = new Recorder(deviceA).begin();
-    const [created, issued] = a.events;
-    if (!created || !issued) throw new Error('no events');
-    await append(connection, sealed(a, created), summary(a.events));
-    const b = new Recorder(deviceB);
-    const note = b.record('imported', { sha256: '0'.repeat(64), added: 2, known: 0, name: 'x' });
-    const fork = { ...created, id: '01890000-0000-7000-8000-00000000eeee' } as CampaignEvent;
-    const other = { ...created, who: 'Somebody else' } as CampaignEvent;
-    const taken = await takeIn(
-      connection,
-      [issued, fork, other].map((event) => sealed(a, event)),
-      sealed(b, note),
-      'file',
-      summary(a.events)
-    );
-    expect(taken).toEqual({ ok: true, value: { quarantined: 1 } });
-    const loaded = await load(connection, campaign, true);
-    const ids = loaded.ok ? loaded.value.events.map(({ id }) => id) : [];
-    expect(new Set(ids)).toEqual(new Set([created.id, issued.id, fork.id, note.id]));
-    const kept = await connection.use((db) => db.getAll('quarantine'));
-    expect(kept.ok && kept.value.map(({ id, from }) => [id, from])).toEqual([[created.id, 'file']]);
   });
 });
 

@@ -1,31 +1,39 @@
-import type { CampaignEvent, DataOf, Kind, UnknownEvent } from '#lib/core/campaign/event.ts';
-import { freshEvents } from '#lib/core/campaign/fresh-events.ts';
+import type { DataOf, Kind } from '#lib/core/campaign/event.ts';
 import { type BadData, type Head, makeEvent, type Sealed } from '#lib/core/campaign/make-event.ts';
 import { replay } from '#lib/core/campaign/replay.ts';
-import { noHash, sealOf } from '#lib/core/campaign/seal.ts';
+import { noHash } from '#lib/core/campaign/seal.ts';
 import { type CampaignSummary, summaryOf } from '#lib/core/campaign/summary.ts';
-import { type CampaignFile, type FileError, readCampaignFile } from '#lib/core/exchange/read-campaign-file.ts';
-import { type ImportSummary, summariseImport } from '#lib/core/exchange/summarise-import.ts';
 import { fail, ok, type Result } from '#lib/core/result.ts';
+import { holdUpdates } from '#lib/pwa/busy.ts';
 import { forget, remember } from '#lib/storage/canary.ts';
 import { listCampaigns, removeDemoCampaign } from '#lib/storage/campaigns.ts';
 import type { StorageFault } from '#lib/storage/fault.ts';
-import { append, load, takeIn } from '#lib/storage/journal.ts';
+import { append } from '#lib/storage/journal.ts';
+import { holdsEvent, takeIn } from '#lib/storage/take-in.ts';
+import { type ImportProgress, ImportWorker, type WorkerEnd } from '#lib/workers/import-client.ts';
+import type { ProposedFile, ReadFault, TakenFile, TakeFault } from '#lib/workers/import-messages.ts';
 import { alarm } from './alarm.svelte.ts';
 import { tellOthers, whenOthersWrite } from './channel.ts';
 import { connection } from './database.svelte.ts';
 import type { Act } from './demo/demo-acts.ts';
 import { device } from './device.svelte.ts';
-import { newId, stampNow } from './surroundings.ts';
+import { newId, stampNow, timeNow } from './surroundings.ts';
 
 /** A file that was read and summed up; nothing of it is on this device until it is accepted. */
-export interface ProposedImport {
-  file: CampaignFile;
+export interface ProposedImport extends ProposedFile {
   name: string;
-  summary: ImportSummary;
-  /** The campaign is new on this device. */
-  isNew: boolean;
+  /** Holds the file's events. */
+  worker: ImportWorker;
 }
+
+export interface ImportOptions {
+  /** Ends the work at once; nothing of the file is here then, unless `accept` says that it had been written already. */
+  signal?: AbortSignal | undefined;
+  onProgress?: ((progress: ImportProgress) => void) | undefined;
+}
+
+export type ProposeFault = ReadFault | WorkerEnd;
+export type AcceptFault = TakeFault | WorkerEnd;
 
 /** The campaigns on this device. */
 class Library {
@@ -96,7 +104,14 @@ class Library {
     const last = sealed.at(-1);
     if (!last) return fail({ tag: 'no-acts' });
     const summary = summaryOf(replay(sealed.map(({ event }) => event)), device.id);
-    const written = await takeIn(connection, sealed.slice(0, -1), last, '', summary);
+    const written = await takeIn(connection, {
+      held: { events: [], unreadable: [] },
+      added: sealed.slice(0, -1),
+      aside: [],
+      note: last,
+      from: '',
+      summary
+    });
     if (!written.ok) return written;
     remember(device.id, summary, last.event.id, last.event.at, false);
     tellOthers(campaign);
@@ -104,42 +119,49 @@ class Library {
     return ok(campaign);
   }
 
-  /** Reads a file and says what it would bring. Changes nothing. */
-  async propose(bytes: Uint8Array, name: string): Promise<Result<ProposedImport, FileError | StorageFault>> {
+  /** Reads a file off the screen's thread and says what it would bring. Changes nothing. */
+  async propose(file: File, options: ImportOptions = {}): Promise<Result<ProposedImport, ProposeFault>> {
     await device.start();
-    const read = readCampaignFile(bytes);
-    if (!read.ok) return read;
-    const held = await load(connection, read.value.header.campaign);
-    if (!held.ok) return held;
-    const incoming = read.value.events.map(({ event }) => event);
-    const summary = summariseImport(held.value.events, incoming);
-    return ok({ file: read.value, name, summary, isNew: held.value.events.length === 0 });
+    const worker = new ImportWorker();
+    const read = await watched(worker, options, () => worker.propose(file));
+    if (read.ok) return ok({ ...read.value, name: file.name, worker });
+    worker.stop();
+    return read;
   }
 
-  /** Takes an accepted file in. One transaction: all of it is here afterwards, or nothing. Resolves to the campaign. */
-  async accept(proposed: ProposedImport, attempt = 1): Promise<Result<string, StorageFault | BadData>> {
-    const { file, name, summary } = proposed;
-    const { campaign } = file.header;
-    const held = await load(connection, campaign);
-    if (!held.ok) return held;
-    const fresh = freshEvents(
-      held.value.events,
-      file.events.map(({ event }) => event)
-    );
-    const merged = [...held.value.events, ...fresh];
-    const data = { sha256: file.sha256, added: fresh.length, known: summary.known, name: name.slice(0, 300) };
-    const made = makeEvent({ kind: 'imported', data, who: device.who }, headOf(merged, campaign), stampNow());
-    if (!made.ok) return made;
-    const after = summaryOf(replay([...merged, made.value.event], campaign), device.id);
-    const written = await takeIn(connection, file.events, made.value, name, after);
-    // Another tab recorded something in between.
-    if (!written.ok && written.error.tag === 'stale' && attempt < 3) return this.accept(proposed, attempt + 1);
-    if (!written.ok) return written;
-    remember(device.id, after, made.value.event.id, made.value.event.at, false);
+  /** Weighs a proposed file anew, after another one was taken in. */
+  async weighAgain(proposed: ProposedImport): Promise<Result<ProposedImport, ProposeFault>> {
+    const read = await proposed.worker.weigh();
+    return read.ok ? ok({ ...proposed, ...read.value }) : read;
+  }
+
+  /** Takes an accepted file in. One transaction: all of it is here afterwards, or nothing. */
+  async accept(proposed: ProposedImport, options: ImportOptions = {}): Promise<Result<TakenFile, AcceptFault>> {
+    const { name, worker } = proposed;
+    const order = { device: device.id, who: device.who, name, stamp: stampNow() };
+    let taken = await watched(worker, options, () => worker.take(order));
+    if (!taken.ok && 'note' in taken.error) taken = await this.#wasTaken(proposed, taken.error);
+    if (!taken.ok) return taken;
+    worker.stop();
+    const { campaign, note, summary } = taken.value;
+    remember(device.id, summary, note.id, note.at, false);
     await alarm.check();
     tellOthers(campaign);
     await this.refresh();
-    return ok(campaign);
+    return taken;
+  }
+
+  /** A worker that ended while it wrote has written all or nothing: the database says which. */
+  async #wasTaken(proposed: ProposedImport, end: WorkerEnd): Promise<Result<TakenFile, AcceptFault>> {
+    if (end.note === null) return fail(end);
+    const held = await holdsEvent(connection, end.note);
+    const listed = await listCampaigns(connection);
+    if (!held.ok) return held;
+    if (!listed.ok) return listed;
+    const campaign = proposed.header.campaign;
+    const summary = listed.value.find(({ id }) => id === campaign);
+    if (!held.value || !summary) return fail(end);
+    return ok({ campaign, added: proposed.summary.added, note: { id: end.note, at: timeNow() }, summary });
   }
 
   /** Takes the invented demo off this device; refuses anything else. */
@@ -151,14 +173,20 @@ class Library {
   }
 }
 
-/** Where this device's chain stands in a campaign, from all of its events. */
-function headOf(events: readonly (CampaignEvent | UnknownEvent)[], campaign: string): Head {
-  const last = events.reduce<CampaignEvent | UnknownEvent | null>(
-    (best, event) => (event.device === device.id && event.seq > (best?.seq ?? 0) ? event : best),
-    null
-  );
-  const tick = events.reduce((most, event) => Math.max(most, event.tick ?? 0), 0);
-  return { campaign, device: device.id, seq: last?.seq ?? 0, hash: last ? sealOf(last) : noHash, tick };
+/** Runs a worker's request under a signal; its progress is told while it runs. */
+async function watched<T>(worker: ImportWorker, options: ImportOptions, run: () => Promise<T>): Promise<T> {
+  const { signal, onProgress } = options;
+  const stop = (): void => worker.stop();
+  const letUpdate = holdUpdates();
+  worker.onProgress = onProgress ?? (() => {});
+  if (signal?.aborted) stop();
+  signal?.addEventListener('abort', stop);
+  try {
+    return await run();
+  } finally {
+    letUpdate();
+    signal?.removeEventListener('abort', stop);
+  }
 }
 
 type Made = { kind: Kind; data: DataOf<Kind>; who: string };

@@ -13,7 +13,8 @@ type Any = CampaignEvent | UnknownEvent;
 
 const placeOf = (event: Any): Place => [event.campaign, event.device, event.seq, ''];
 
-const storedOf = ({ event, text, seal }: Pick<Sealed, 'text' | 'seal'> & { event: Any }): StoredEvent => ({
+/** An event as it is kept. */
+export const storedOf = ({ event, text, seal }: Pick<Sealed, 'text' | 'seal'> & { event: Any }): StoredEvent => ({
   id: event.id,
   campaign: event.campaign,
   at: placeOf(event),
@@ -21,7 +22,8 @@ const storedOf = ({ event, text, seal }: Pick<Sealed, 'text' | 'seal'> & { event
   seal
 });
 
-const strict = { durability: 'strict' } as const;
+/** Written to the disk before the transaction says that it is complete. */
+export const strict = { durability: 'strict' } as const;
 
 /** The draft of an act on its way into the record. */
 export interface TakenDraft {
@@ -98,47 +100,4 @@ function readOne(stored: StoredEvent, loaded: LoadedLog, verify: boolean): void 
     rememberSeal(checked.value, stored.seal);
     loaded.events.push(checked.value);
   }
-}
-
-export interface Incoming {
-  event: Any;
-  text: string;
-  seal: string;
-}
-
-/**
- * Takes accepted events of other devices in, all or none, in one transaction with the event that says so. Events held
- * already are left alone; the same id with other bytes goes to quarantine; a number taken twice (a fork) is kept beside
- * the first.
- */
-export function takeIn(
-  connection: Connection,
-  incoming: readonly Incoming[],
-  note: Sealed,
-  from: string,
-  summary: CampaignSummary
-): Promise<Result<{ quarantined: number }, StorageFault>> {
-  return connection.write(async (db) => {
-    const tx = db.transaction(['events', 'campaigns', 'quarantine'], 'readwrite', strict);
-    tx.done.catch(() => undefined);
-    const events = tx.objectStore('events');
-    let quarantined = 0;
-    for (const one of incoming) {
-      const stored = storedOf(one);
-      const held = await events.get(stored.id);
-      if (held && held.text !== stored.text) {
-        quarantined++;
-        const { campaign, id, text, seal } = stored;
-        await tx.objectStore('quarantine').put({ campaign, id, text, seal, from, at: note.event.at });
-      } else if (!held) {
-        const taken = await events.index('at').getKey(stored.at);
-        const [campaign, device, seq] = stored.at;
-        await events.add(taken === undefined ? stored : { ...stored, at: [campaign, device, seq, stored.id] });
-      }
-    }
-    if (!(await events.get(note.event.id))) await events.add(storedOf(note));
-    await tx.objectStore('campaigns').put(summary);
-    await tx.done;
-    return { quarantined };
-  });
 }

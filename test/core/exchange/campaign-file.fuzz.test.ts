@@ -5,7 +5,7 @@ import { replay } from '#lib/core/campaign/replay.ts';
 import { stateHash } from '#lib/core/campaign/state-hash.ts';
 import { writeCampaignFile } from '#lib/core/exchange/campaign-file.ts';
 import { readCampaignFile } from '#lib/core/exchange/read-campaign-file.ts';
-import { summariseImport } from '#lib/core/exchange/summarise-import.ts';
+import { weighImport } from '#lib/core/exchange/summarise-import.ts';
 import { Dice } from '../campaign/random-history.ts';
 import { campaign, deviceA, Recorder } from '../campaign/story.ts';
 
@@ -106,11 +106,12 @@ describe('readCampaignFile', () => {
       expect(damage, `${name}, file ${n}`).not.toBeNull();
       for (const bad of damage?.badLines ?? []) expect(bad.line, name).toBeGreaterThan(1);
       // What could be read may be summed up without a throw, and summing up changes nothing that is held.
-      const summary = summariseImport(
+      const { summary } = weighImport(
+        campaign,
         held,
         events.map(({ event }) => event)
       );
-      expect(summary.added.length + summary.known + summary.quarantined.length, name).toBe(events.length);
+      expect(summary.added + summary.known + summary.quarantined, name).toBe(events.length);
       expect(stateHash(replay(held))).toBe(heldHash);
     }
     console.log(`fuzz: ${files} mutated files, ${refused} refused whole, ${damaged} read with their damage named`);

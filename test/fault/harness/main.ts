@@ -92,11 +92,11 @@ const harness = {
   },
   /** Takes a file in, as a person does: propose, look, accept. */
   async import(text: string): Promise<{ added: number; known: number }> {
-    const proposed = await library.propose(new TextEncoder().encode(text), 'file');
+    const proposed = await library.propose(new File([text], 'file'));
     if (!proposed.ok) throw new Error(`not proposed: ${proposed.error.tag}`);
     const accepted = await library.accept(proposed.value);
     if (!accepted.ok) throw new Error(`not accepted: ${accepted.error.tag}`);
-    return { added: proposed.value.summary.added.length, known: proposed.value.summary.known };
+    return { added: proposed.value.summary.added, known: proposed.value.summary.known };
   },
   /** Reads the whole log back from the database: texts, sequence numbers, flags, hash. */
   async verify(id: string) {

@@ -25,6 +25,21 @@ export const sha256OfText = (text: string): string => bytesToHex(sha256(utf8ToBy
 /** SHA-256 of bytes, 64 lower-case hexadecimal digits. */
 export const sha256OfBytes = (bytes: Uint8Array): string => bytesToHex(sha256(bytes));
 
+/** SHA-256 of bytes that come in parts; the sum so far may be asked for at any time. */
+export class RunningSha256 {
+  #hash = sha256.create();
+
+  add(bytes: Uint8Array): this {
+    this.#hash.update(bytes);
+    return this;
+  }
+
+  /** 64 lower-case hexadecimal digits. */
+  get sum(): string {
+    return bytesToHex(this.#hash.clone().digest());
+  }
+}
+
 /** An object's seal does not change: events are never edited after they are made. */
 const known = new WeakMap<object, string>();
 

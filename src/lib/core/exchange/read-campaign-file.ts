@@ -1,17 +1,11 @@
 import * as v from 'valibot';
 import { checkEvent } from '../campaign/check-event.ts';
 import type { CampaignEvent, UnknownEvent } from '../campaign/event.ts';
-import { canonicalJson, rememberSeal, sha256OfBytes, sha256OfText } from '../campaign/seal.ts';
+import { canonicalJson, rememberSeal, RunningSha256, sha256OfBytes, sha256OfText } from '../campaign/seal.ts';
 import { fail, ok, type Result } from '../result.ts';
 import { fileLimits } from './file-limits.ts';
-import {
-  type FileFooter,
-  fileFormat,
-  type FileHeader,
-  fileVersion,
-  FooterSchema,
-  HeaderSchema
-} from './file-schema.ts';
+import { type FileFooter, type FileHeader, FooterSchema } from './file-schema.ts';
+import { type HeaderError, type Look, readHeader, sniff } from './read-header.ts';
 import { type JsonFault, strictJson } from './strict-json.ts';
 import { decodeUtf8 } from './utf8.ts';
 
@@ -20,9 +14,8 @@ export type FileError =
   | { tag: 'empty-file' }
   | { tag: 'too-big'; bytes: number; most: number }
   /** Not one of ours: no header line. `looksLike` is what its first bytes say it is. */
-  | { tag: 'not-a-campaign-file'; looksLike: 'zip' | 'pdf' | 'image' | 'html' | 'csv' | 'json' | 'text' | 'binary' }
-  | { tag: 'newer-file'; version: number; understands: number }
-  | { tag: 'bad-header'; path: string; cause: string };
+  | { tag: 'not-a-campaign-file'; looksLike: Look }
+  | HeaderError;
 
 /** A line that is not taken in, and why. */
 export interface BadLine {
@@ -45,6 +38,8 @@ export interface BadLine {
 export interface Damage {
   /** Whole event lines that the header counted and that are not there or not readable. */
   missingLines: number;
+  /** How many lines are not taken in; the first of them are in `badLines`. */
+  bad: number;
   badLines: BadLine[];
   /** Lines that stand in the file more than once. */
   repeated: number;
@@ -69,7 +64,10 @@ export interface CampaignFile {
   sha256: string;
 }
 
-/** Called now and then with the share read so far, 0 to 1; returning false stops the reading. */
+/** Bad lines that are named one by one; a file of nothing else is not kept in memory twice. */
+const named = 100;
+
+/** Called now and then with the share read so far, 0 to 1. */
 export type Progress = (done: number) => void;
 
 /**
@@ -88,16 +86,20 @@ export function readCampaignFile(bytes: Uint8Array, progress: Progress = () => {
   const header = head.value;
 
   const badLines: BadLine[] = [];
+  let allBad = 0;
   const events: ReadEvent[] = [];
   const seen = new Set<string>();
   let repeated = 0;
   let footer: FileFooter | null = null;
   let fits = false;
+  const sum = new RunningSha256();
+  let summed = 0;
   for (let index = 1; index < lines.length; index++) {
     const line = lines[index] as Line;
     const number = index + 1;
-    const bad = (cause: BadLine['cause'], path = '', detail = ''): void =>
-      void badLines.push({ line: number, cause, path, detail });
+    const bad = (cause: BadLine['cause'], path = '', detail = ''): void => {
+      if (++allBad <= named) badLines.push({ line: number, cause, path, detail });
+    };
     if (index % 500 === 0) progress(line.from / bytes.length);
     if (footer) {
       bad('after-footer');
@@ -112,7 +114,8 @@ export function readCampaignFile(bytes: Uint8Array, progress: Progress = () => {
       bad('not-json');
       continue;
     }
-    const text = decodeUtf8(bytes.subarray(line.from, line.to));
+    const own = bytes.subarray(line.from, line.to);
+    const text = decodeUtf8(own);
     if (text === null) {
       bad('not-text');
       continue;
@@ -130,33 +133,36 @@ export function readCampaignFile(bytes: Uint8Array, progress: Progress = () => {
       }
       footer = checked.output;
       const { seal, ...rest } = footer;
-      fits =
-        seal === sha256OfText(canonicalJson(rest)) &&
-        footer.sha256 === sha256OfBytes(bytes.subarray(0, line.from)) &&
-        footer.events === header.events;
+      const before = sum.add(bytes.subarray(0, line.from)).sum;
+      summed = line.from;
+      fits = seal === sha256OfText(canonicalJson(rest)) && footer.sha256 === before && footer.events === header.events;
       continue;
     }
     const checked = checkEvent(parsed.value);
     if (!checked.ok) bad('bad-event', checked.error.path, checked.error.cause);
     else if (checked.value.campaign !== header.campaign) bad('other-campaign', '', checked.value.campaign);
     else if (events.length >= fileLimits.events) bad('too-many');
-    else if (seen.has(text)) repeated++;
     else {
-      seen.add(text);
-      const seal = sha256OfText(text);
+      const seal = sha256OfBytes(own);
+      if (seen.has(seal)) {
+        repeated++;
+        continue;
+      }
+      seen.add(seal);
       rememberSeal(checked.value, seal);
       events.push({ event: checked.value, text, seal, line: number });
     }
   }
   progress(1);
-  const sound = fits && badLines.length === 0 && repeated === 0 && events.length === header.events;
+  const sound = fits && allBad === 0 && repeated === 0 && events.length === header.events;
   const damage: Damage = {
     missingLines: Math.max(0, header.events - events.length),
+    bad: allBad,
     badLines,
     repeated,
     footer: footer === null ? 'absent' : fits ? 'fits' : 'differs'
   };
-  return ok({ header, footer, events, damage: sound ? null : damage, sha256: sha256OfBytes(bytes) });
+  return ok({ header, footer, events, damage: sound ? null : damage, sha256: sum.add(bytes.subarray(summed)).sum });
 }
 
 interface Line {
@@ -180,36 +186,3 @@ function linesOf(bytes: Uint8Array): Line[] {
 
 const isFooter = (value: unknown): boolean =>
   value !== null && typeof value === 'object' && Object.hasOwn(value, 'sha256') && !Object.hasOwn(value, 'kind');
-
-/** The header, or null when the line is none of ours. */
-function readHeader(bytes: Uint8Array): Result<FileHeader, FileError> | null {
-  if (bytes.length > 4096) return null;
-  const text = decodeUtf8(bytes);
-  const parsed = text === null ? null : strictJson(text);
-  if (!parsed?.ok || parsed.value === null || typeof parsed.value !== 'object') return null;
-  const { format, version } = parsed.value as { format?: unknown; version?: unknown };
-  if (format !== fileFormat) return null;
-  if (typeof version === 'number' && version > fileVersion)
-    return fail({ tag: 'newer-file', version, understands: fileVersion });
-  const checked = v.safeParse(HeaderSchema, parsed.value);
-  if (checked.success) return ok(checked.output);
-  const [issue] = checked.issues;
-  return fail({ tag: 'bad-header', path: v.getDotPath(issue) ?? '', cause: issue.message });
-}
-
-type Look = Extract<FileError, { tag: 'not-a-campaign-file' }>['looksLike'];
-
-/** What a file is by its first bytes; its name is not asked. */
-function sniff(bytes: Uint8Array): Look {
-  const begins = (...signature: number[]): boolean => signature.every((byte, at) => bytes[at] === byte);
-  if (begins(0x50, 0x4b)) return 'zip';
-  if (begins(0x25, 0x50, 0x44, 0x46)) return 'pdf';
-  if (begins(0x89, 0x50, 0x4e, 0x47) || begins(0xff, 0xd8, 0xff) || begins(0x47, 0x49, 0x46)) return 'image';
-  const text = decodeUtf8(bytes.subarray(0, 4096).filter((byte) => byte < 128));
-  if (text === null || bytes.subarray(0, 4096).includes(0)) return 'binary';
-  const start = text.trimStart().toLowerCase();
-  if (start.startsWith('<!doctype') || start.startsWith('<html') || start.startsWith('<svg')) return 'html';
-  if (start.startsWith('{') || start.startsWith('[')) return 'json';
-  const line = text.split('\n')[0] ?? '';
-  return /[;,\t]/.test(line) ? 'csv' : 'text';
-}

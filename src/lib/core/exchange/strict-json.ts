@@ -6,7 +6,7 @@ export type JsonFault = { tag: 'bad-json'; cause: 'not-json' | 'too-deep' | 'hos
 
 const hostile = new Set(['__proto__', 'constructor', 'prototype']);
 
-/** Nesting of a JSON text, counted without parsing. */
+/** Nesting of a text that could not be parsed. */
 function depthOf(text: string): number {
   let depth = 0;
   let deepest = 0;
@@ -23,22 +23,28 @@ function depthOf(text: string): number {
   return deepest;
 }
 
-/** Are the keys of every object harmless, and do they stand in order (RFC 8785, 3.2.3: by UTF-16 code units)? */
-function keysOf(value: unknown): { harmless: boolean; sorted: boolean } {
-  const found = { harmless: true, sorted: true };
-  const visit = (one: unknown): void => {
-    if (one === null || typeof one !== 'object') return;
-    if (Array.isArray(one)) return one.forEach(visit);
-    let before: string | null = null;
-    for (const [key, inner] of Object.entries(one)) {
-      if (hostile.has(key)) found.harmless = false;
-      if (before !== null && !(before < key)) found.sorted = false;
-      before = key;
-      visit(inner);
-    }
-  };
-  visit(value);
-  return found;
+interface Keys {
+  harmless: boolean;
+  sorted: boolean;
+  deepest: number;
+}
+
+/** Are the keys of every object harmless, do they stand in order (RFC 8785, 3.2.3: by UTF-16 code units), how deep is it? */
+function look(one: unknown, found: Keys, depth: number): void {
+  if (one === null || typeof one !== 'object') return;
+  if (depth > found.deepest) found.deepest = depth;
+  if (depth > fileLimits.depth) return;
+  if (Array.isArray(one)) {
+    for (const inner of one) look(inner, found, depth + 1);
+    return;
+  }
+  let before: string | null = null;
+  for (const key of Object.keys(one)) {
+    if (hostile.has(key)) found.harmless = false;
+    if (before !== null && !(before < key)) found.sorted = false;
+    before = key;
+    look((one as Record<string, unknown>)[key], found, depth + 1);
+  }
 }
 
 /** A half character can only stand in canonical JSON as an escape; RFC 8785 refuses it (3.2.2.2). */
@@ -48,19 +54,21 @@ const halfCharacter = /(?<!\\)(?:\\\\)*\\ud[89a-f]/;
  * Parses one line of a campaign file: only the very text that canonical JSON gives is accepted, so that what is hashed and
  * what is read cannot differ (doubled keys, other spellings of a number, white space).
  * Source: RFC 8785; ECMAScript's JSON.stringify writes strings and numbers as it asks.
- * Checked by: test/core/exchange/strict-json.test.ts.
+ * Checked by: test/core/exchange/campaign-file.test.ts, test/core/exchange/campaign-file.fuzz.test.ts.
  */
 export function strictJson(text: string): Result<unknown, JsonFault> {
-  if (depthOf(text) > fileLimits.depth) return fail({ tag: 'bad-json', cause: 'too-deep' });
   let value: unknown;
   try {
     value = JSON.parse(text);
   } catch {
-    return fail({ tag: 'bad-json', cause: 'not-json' });
+    return fail({ tag: 'bad-json', cause: depthOf(text) > fileLimits.depth ? 'too-deep' : 'not-json' });
   }
-  const { harmless, sorted } = keysOf(value);
+  const found: Keys = { harmless: true, sorted: true, deepest: 0 };
+  look(value, found, 1);
+  const { harmless, sorted, deepest } = found;
+  if (deepest > fileLimits.depth) return fail({ tag: 'bad-json', cause: 'too-deep' });
   if (!harmless) return fail({ tag: 'bad-json', cause: 'hostile-key' });
-  if (halfCharacter.test(text)) return fail({ tag: 'bad-json', cause: 'not-canonical' });
+  if (text.includes('\\ud') && halfCharacter.test(text)) return fail({ tag: 'bad-json', cause: 'not-canonical' });
   // Keys that look like numbers come out of an object in another order than they went in.
   const canonical = sorted ? JSON.stringify(value) : canonicalJson(value);
   return canonical === text ? ok(value) : fail({ tag: 'bad-json', cause: 'not-canonical' });

@@ -1,7 +1,7 @@
 import type { CampaignEvent, UnknownEvent } from '../campaign/event.ts';
-import { replay } from '../campaign/replay.ts';
+import { Replay } from '../campaign/replay.ts';
 import { sealOf } from '../campaign/seal.ts';
-import type { Contradiction, RecordFlag } from '../campaign/state.ts';
+import type { CampaignState, Contradiction, RecordFlag } from '../campaign/state.ts';
 
 type Any = CampaignEvent | UnknownEvent;
 
@@ -15,31 +15,48 @@ export interface DeviceShare {
   last: string;
 }
 
-/** What a file would change, before anything is changed. */
+/** How many there are of a kind. */
+export interface Counted<K extends string> {
+  kind: K;
+  count: number;
+}
+
+/** What a file would change, before anything is changed. Small however large the file is. */
 export interface ImportSummary {
   campaign: string;
   title: string;
-  added: Any[];
+  added: number;
   known: number;
-  /** Known ids with other bytes: never applied, kept aside, named. */
-  quarantined: { id: string; kind: string; who: string; at: string }[];
+  /** Known ids with other bytes: never applied, kept aside. */
+  quarantined: number;
   devices: DeviceShare[];
   /** What would contradict that does not now. */
-  contradictions: Contradiction[];
+  contradictions: Counted<Contradiction['kind']>[];
   /** Gaps, forks, edits, jumped clocks that would be new. */
-  flags: RecordFlag[];
-  /** Kinds of event that this version of the program does not understand. */
-  notUnderstood: number;
+  flags: Counted<RecordFlag['kind']>[];
+  /** Kinds of event that this version of the program does not understand, by name. */
+  notUnderstood: Counted<string>[];
+}
+
+/** A file's events weighed against those that are held. */
+export interface WeighedImport<T extends Any = Any> {
+  summary: ImportSummary;
+  /** Events that are not held, in the file's order. */
+  added: T[];
+  /** Other bytes under an id that is held, or that came earlier in the file. */
+  aside: T[];
+  /** What the campaign would be with all of it. */
+  replay: Replay;
 }
 
 /** The union of events by id. What is held stays; other bytes under a held id are handed back, not merged. */
-export function mergeEvents(
+export function mergeEvents<T extends Any>(
   existing: readonly Any[],
-  incoming: readonly Any[]
-): { merged: Any[]; added: Any[]; aside: Any[]; known: number } {
-  const held = new Map(existing.map((event) => [event.id, event]));
-  const added: Any[] = [];
-  const aside: Any[] = [];
+  incoming: readonly T[]
+): { added: T[]; aside: T[]; known: number } {
+  const held = new Map<string, Any>(existing.map((event) => [event.id, event]));
+  const added: T[] = [];
+  const aside: T[] = [];
   let known = 0;
   for (const event of incoming) {
     const same = held.get(event.id);
@@ -49,35 +66,65 @@ export function mergeEvents(
     } else if (sealOf(same) === sealOf(event)) known++;
     else aside.push(event);
   }
-  return { merged: [...held.values()], added, aside, known };
+  return { added, aside, known };
 }
 
 /**
  * What taking in the events of a file would do: new, known, contradicting, set aside. Changes nothing.
  * @param existing events of the same campaign on this device; empty when the campaign is new here
- * Checked by: test/core/exchange/summarise-import.test.ts.
+ * Cost n log n in all events together, whatever their order.
+ * Checked by: test/core/exchange/campaign-file.test.ts.
  */
-export function summariseImport(existing: readonly Any[], incoming: readonly Any[]): ImportSummary {
-  const { merged, added, aside, known } = mergeEvents(existing, incoming);
-  const before = replay(existing);
-  const after = replay(merged);
-  const open = (state: typeof after): Contradiction[] => state.contradictions.filter(({ decided }) => decided === null);
+export function weighImport<T extends Any>(
+  campaign: string,
+  existing: readonly Any[],
+  incoming: readonly T[]
+): WeighedImport<T> {
+  const { added, aside, known } = mergeEvents(existing, incoming);
+  let replay = replayed(campaign, existing);
+  const before = replay.state;
+  const heads = new Map(before.devices.map(({ device, seq }) => [device, seq]));
+  // What continues a chain is cheap to add; what goes between its links is replayed anew, once.
+  if (added.every((event) => event.seq > (heads.get(event.device) ?? 0))) replayed(campaign, added, replay);
+  else replay = replayed(campaign, [...existing, ...added]);
+  return { summary: summaryFrom(before, replay.state, { added, aside, known }), added, aside, replay };
+}
+
+/** A device's chain is read in its own order: an event out of turn makes the whole chain be read again. */
+function replayed(campaign: string, events: readonly Any[], onto = new Replay(campaign)): Replay {
+  for (const event of [...events].sort((a, b) => a.seq - b.seq)) onto.apply(event);
+  return onto;
+}
+
+function summaryFrom(
+  before: CampaignState,
+  after: CampaignState,
+  { added, aside, known }: { added: readonly Any[]; aside: readonly Any[]; known: number }
+): ImportSummary {
+  const open = (state: CampaignState): Contradiction[] =>
+    state.contradictions.filter(({ decided }) => decided === null);
+  const nameOf = (flag: RecordFlag): string => `${flag.kind} ${flag.device} ${flag.event} ${flag.detail}`;
   const had = new Map(open(before).map((one) => [one.key, one.events.length]));
-  const flagged = new Set(before.flags.map((flag) => `${flag.kind} ${flag.device} ${flag.event} ${flag.detail}`));
+  const flagged = new Set(before.flags.map(nameOf));
+  const fresh = after.flags.filter((flag) => !flagged.has(nameOf(flag)));
+  const strange = new Set(before.notUnderstood.map(({ id }) => id));
   return {
     campaign: after.id,
     title: after.title,
-    added,
+    added: added.length,
     known,
-    quarantined: aside.map(({ id, kind, who, at }) => ({ id, kind, who, at })),
+    quarantined: aside.length,
     devices: sharesOf(added),
-    contradictions: open(after).filter((one) => had.get(one.key) !== one.events.length),
-    flags: after.flags.filter(
-      (flag) =>
-        !flagged.has(`${flag.kind} ${flag.device} ${flag.event} ${flag.detail}`) && flag.kind !== 'not-understood'
-    ),
-    notUnderstood: after.notUnderstood.length - before.notUnderstood.length
+    contradictions: countsOf(open(after).filter((one) => had.get(one.key) !== one.events.length)),
+    flags: countsOf(fresh.filter(({ kind }) => kind !== 'not-understood')),
+    notUnderstood: countsOf(after.notUnderstood.filter(({ id }) => !strange.has(id)))
   };
+}
+
+function countsOf<K extends string>(list: readonly { kind: K }[]): Counted<K>[] {
+  const counts = new Map<K, number>();
+  for (const { kind } of list) counts.set(kind, (counts.get(kind) ?? 0) + 1);
+  return [...counts].map(([kind, count]) => ({ kind, count }));
 }
 
 function sharesOf(added: readonly Any[]): DeviceShare[] {

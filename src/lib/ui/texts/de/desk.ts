@@ -8,85 +8,13 @@ export const desk: typeof en = {
   drop: 'Dateien hier ablegen',
   dropHint: 'Kampagnendateien eines oder mehrerer Tablets oder eine Tabelle mit Messwerten (CSV) von anderswo.',
   choose: 'Dateien wählen',
-  reading: (name) => `${name} wird gelesen …`,
-  files: 'Dateien',
-  takeIn: 'Übernehmen',
   leave: 'Weglassen',
-  again: 'Noch einmal',
+  files: 'Dateien',
   taken: (n) =>
     `Übernommen: ${s(n, 'neues Ereignis', 'neue Ereignisse')}. Alles, was vorher hier war, ist unverändert.`,
-  nothingNew: 'Nichts darin ist neu. Alles, was sie enthält, ist schon hier.',
   otherCampaign: (title) => `Diese Datei gehört zu einer anderen Kampagne: ${title}.`,
   newCampaign: 'Diese Kampagne ist auf diesem Gerät neu.',
   open: 'Diese Kampagne öffnen',
-  summary: {
-    added: (n) => s(n, 'Ereignis ist neu', 'Ereignisse sind neu'),
-    known: (n) => s(n, 'Ereignis war bekannt', 'Ereignisse waren bekannt'),
-    contradictions: (n) =>
-      n === 0 ? 'nichts widerspricht sich' : `${s(n, 'Widerspruch', 'Widersprüche')} zu entscheiden`,
-    quarantined: (n) =>
-      `${s(n, 'Ereignis hat', 'Ereignisse haben')} eine bekannte Nummer, aber anderen Inhalt. Sie werden beiseitegelegt, nicht übernommen: eine der beiden Dateien wurde verändert.`,
-    devices: 'Von',
-    device: (who, n, first, last) => `${who}: ${s(n, 'Ereignis', 'Ereignisse')}, ${first} bis ${last}`,
-    notUnderstood: (n) =>
-      `${s(n, 'Ereignis stammt', 'Ereignisse stammen')} von einer späteren Fassung des Programms. Sie werden aufbewahrt, hier aber nicht verstanden.`,
-    flags: 'Was man über die Aufzeichnung wissen muss',
-    damage: {
-      head: 'Die Datei ist beschädigt. Was sich ganz lesen lässt, wird angeboten; nichts wird geraten.',
-      missing: (n) => `${s(n, 'Ereignis fehlt', 'Ereignisse fehlen')}. Die Datei noch einmal anfordern.`,
-      footer: {
-        fits: '',
-        differs: 'Ihre Prüfsumme passt nicht: die Datei wurde nach dem Schreiben verändert oder beschädigt.',
-        absent: 'Ihr Ende fehlt: sie wurde beim Kopieren abgeschnitten.'
-      },
-      line: (line, cause) => `Zeile ${line}: ${cause}.`,
-      repeated: (n) => `${s(n, 'Zeile steht', 'Zeilen stehen')} mehr als einmal darin; jede zählt einmal.`,
-      more: (n) => `und ${n} weitere`
-    }
-  },
-  cause: {
-    'not-json': 'nicht lesbar',
-    'too-deep': 'zu tief verschachtelt',
-    'duplicate-key': 'ein Name steht zweimal darin',
-    'forbidden-key': 'ein Name darin ist nicht erlaubt',
-    'not-an-object': 'kein Ereignis',
-    'bad-event': 'ein Ereignis, das dem Format nicht folgt',
-    'other-campaign': 'ein Ereignis einer anderen Kampagne',
-    'too-long': 'zu lang',
-    'not-text': 'kein Text',
-    'bad-footer': 'die Schlusszeile folgt dem Format nicht',
-    'after-footer': 'steht hinter der Schlusszeile',
-    'too-many': 'mehr Ereignisse, als sich auf einmal übernehmen lassen'
-  },
-  fileError(error) {
-    switch (error.tag) {
-      case 'empty-file':
-        return 'Die Datei ist leer. Hier wurde nichts verändert. Noch einmal anfordern.';
-      case 'too-big':
-        return `Die Datei ist größer (${Math.round(error.bytes / 1e6)} MB), als hier gelesen werden kann (${Math.round(error.most / 1e6)} MB).`;
-      case 'not-a-campaign-file':
-        return {
-          zip: 'Das ist eine ZIP-Datei. Auspacken und die Kampagnendatei darin ablegen.',
-          pdf: 'Das ist ein PDF. Nötig ist eine Kampagnendatei oder eine Tabelle mit Messwerten.',
-          image: 'Das ist ein Bild. Nötig ist eine Kampagnendatei oder eine Tabelle mit Messwerten.',
-          html: 'Das ist eine Webseite, vielleicht ein Bericht. Nötig ist die Kampagnendatei selbst.',
-          csv: 'Das ist eine Tabelle, keine Kampagnendatei.',
-          json: 'Das ist eine Datendatei anderer Art, keine Kampagnendatei.',
-          text: 'Das ist ein Text, weder Kampagnendatei noch Tabelle mit Messwerten.',
-          binary: 'Das ist weder eine Kampagnendatei noch eine Tabelle mit Messwerten.'
-        }[error.looksLike];
-      case 'newer-file':
-        return `Die Datei stammt von einer späteren Fassung des Programms (Format ${error.version}; diese liest bis ${error.understands}). Zuerst dieses Gerät aktualisieren.`;
-      case 'bad-header':
-        return `Die erste Zeile der Datei folgt dem Format nicht (${error.path}: ${error.cause}).`;
-    }
-  },
-  storage: (tag) =>
-    tag === 'quota'
-      ? 'Auf diesem Gerät ist kein Platz mehr. Nichts wurde übernommen, nichts ging verloren: exportieren, Platz schaffen, noch einmal.'
-      : tag === 'newer-schema'
-        ? 'Eine spätere Fassung des Programms schrieb auf dieses Gerät; diese liest nur. Aktualisieren, dann noch einmal.'
-        : `Das Gerät konnte es nicht ablegen (${tag}). Nichts wurde übernommen, nichts ging verloren: noch einmal versuchen.`,
   progress: {
     title: 'Wie weit die Kampagne ist',
     done: (done, all) => `${done} von ${all} Belegungen abgeschlossen`,

@@ -102,6 +102,10 @@ export const home: typeof en = {
     } as Record<string, string>,
     store: (tag: string) =>
       ({
+        'unreadable-file':
+          'Die Datei ließ sich nicht lesen: sie wurde verschoben, verändert oder entfernt. Noch einmal wählen.',
+        'worker-died':
+          'Das Lesen brach ab, vielleicht aus Mangel an Speicher. Nichts wurde verändert. Andere Tabs schließen, dann noch einmal.',
         quota:
           'Auf dem Gerät ist kein Platz mehr. Was vorher abgelegt war, ist sicher. Platz schaffen und noch einmal versuchen.',
         blocked:

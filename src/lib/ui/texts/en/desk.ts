@@ -1,4 +1,3 @@
-import type { BadLine, FileError } from '../../../core/exchange/read-campaign-file.ts';
 import type { DelimitedFault } from '../../../core/exchange/readings-table/read-delimited.ts';
 import type { TableFault } from '../../../core/exchange/readings-table/plan-from-table.ts';
 
@@ -10,85 +9,12 @@ export const desk = {
   drop: 'Drop files here',
   dropHint: 'Campaign files of one or several tablets, or a table of readings (CSV) from elsewhere.',
   choose: 'Choose files',
-  reading: (name: string) => `Reading ${name} …`,
-  files: 'Files',
-  takeIn: 'Take it in',
   leave: 'Leave it out',
-  again: 'Try again',
+  files: 'Files',
   taken: (n: number) => `Taken in: ${s(n, 'new event', 'new events')}. Everything that was here before is unchanged.`,
-  nothingNew: 'Nothing in it is new. Everything it holds is already here.',
   otherCampaign: (title: string) => `This file belongs to another campaign: ${title}.`,
   newCampaign: 'This campaign is new on this device.',
   open: 'Open this campaign',
-  summary: {
-    added: (n: number) => s(n, 'event is new', 'events are new'),
-    known: (n: number) => s(n, 'event was known', 'events were known'),
-    contradictions: (n: number) =>
-      n === 0 ? 'nothing contradicts' : `${s(n, 'contradiction', 'contradictions')} to decide`,
-    quarantined: (n: number) =>
-      `${s(n, 'event has', 'events have')} a known number but other content. They are set aside, not taken in: one of the two files was changed.`,
-    devices: 'From',
-    device: (who: string, n: number, first: string, last: string) =>
-      `${who}: ${s(n, 'event', 'events')}, ${first} to ${last}`,
-    notUnderstood: (n: number) =>
-      `${s(n, 'event comes', 'events come')} from a later version of the program. They are kept, but not understood here.`,
-    flags: 'What to know about the record',
-    damage: {
-      head: 'The file is damaged. What can be read whole is offered; nothing is guessed.',
-      missing: (n: number) => `${s(n, 'event is', 'events are')} missing. Ask for the file once more.`,
-      footer: {
-        fits: '',
-        differs: 'Its check sum does not fit: the file was changed or damaged after it was written.',
-        absent: 'Its end is missing: it was cut while it was copied.'
-      },
-      line: (line: number, cause: string) => `Line ${line}: ${cause}.`,
-      repeated: (n: number) => `${s(n, 'line stands', 'lines stand')} in it more than once; each counts once.`,
-      more: (n: number) => `and ${n} more`
-    }
-  },
-  cause: {
-    'not-json': 'not readable',
-    'too-deep': 'nested too deeply',
-    'duplicate-key': 'a name stands in it twice',
-    'forbidden-key': 'a name in it is not allowed',
-    'not-an-object': 'not an event',
-    'bad-event': 'an event that does not follow the format',
-    'other-campaign': 'an event of another campaign',
-    'too-long': 'too long',
-    'not-text': 'not text',
-    'bad-footer': 'the closing line does not follow the format',
-    'after-footer': 'stands after the closing line',
-    'too-many': 'more events than can be taken in at once'
-  } as Partial<Record<BadLine['cause'], string>> & Record<string, string>,
-  fileError(error: FileError): string {
-    switch (error.tag) {
-      case 'empty-file':
-        return 'The file is empty. Nothing here was changed. Ask for it once more.';
-      case 'too-big':
-        return `The file is larger (${Math.round(error.bytes / 1e6)} MB) than can be read here (${Math.round(error.most / 1e6)} MB).`;
-      case 'not-a-campaign-file':
-        return {
-          zip: 'This is a ZIP file. Unpack it and drop the campaign file that is in it.',
-          pdf: 'This is a PDF. A campaign file or a table of readings is needed.',
-          image: 'This is a picture. A campaign file or a table of readings is needed.',
-          html: 'This is a web page, perhaps a report. The campaign file itself is needed.',
-          csv: 'This is a table, not a campaign file.',
-          json: 'This is a data file of some other kind, not a campaign file.',
-          text: 'This is a text, not a campaign file and not a table of readings.',
-          binary: 'This is neither a campaign file nor a table of readings.'
-        }[error.looksLike];
-      case 'newer-file':
-        return `The file was written by a later version of the program (format ${error.version}; this one reads up to ${error.understands}). Update this device first.`;
-      case 'bad-header':
-        return `The first line of the file does not follow the format (${error.path}: ${error.cause}).`;
-    }
-  },
-  storage: (tag: string) =>
-    tag === 'quota'
-      ? 'This device has no room left. Nothing was taken in and nothing was lost: export, make room, then try again.'
-      : tag === 'newer-schema'
-        ? 'A later version of the program wrote to this device; this version only reads. Update, then try again.'
-        : `The device could not store it (${tag}). Nothing was taken in and nothing was lost: try again.`,
   progress: {
     title: 'How far the campaign is',
     done: (done: number, all: number) => `${done} of ${all} sessions closed`,

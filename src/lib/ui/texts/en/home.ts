@@ -93,6 +93,9 @@ export const home = {
     } as Record<string, string>,
     store: (tag: string) =>
       ({
+        'unreadable-file': 'The file could not be read: it was moved, changed or taken away. Choose it once more.',
+        'worker-died':
+          'Reading stopped, perhaps for want of memory. Nothing was changed. Close other tabs, then try again.',
         quota: 'The device has no room left. What was stored before is safe. Free some space and try again.',
         blocked: 'Another tab holds an older version of this app open. Close it, then load this page again.',
         'newer-schema':
