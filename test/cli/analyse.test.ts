@@ -4,11 +4,9 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { afterAll, describe, expect, test } from 'vitest';
 import type { Analysis } from '#lib/core/analysis/analysis-result.ts';
-import { makeEvent, type Head } from '#lib/core/campaign/make-event.ts';
-import { noHash } from '#lib/core/campaign/seal.ts';
 import { writeCampaignFile } from '#lib/core/exchange/campaign-file.ts';
-import { demoActs } from '#lib/state/demo/demo-acts.ts';
 import { readingsFromCsv, type AnalysisChoices } from '../../src/cli/readings-csv.ts';
+import { demoEvents, demoMaker } from '../state/demo/demo-events.ts';
 
 const folder = mkdtempSync(join(tmpdir(), 'evenload-'));
 afterAll(() => rmSync(folder, { recursive: true }));
@@ -37,23 +35,6 @@ function catalyst(): string {
   return ['treatment,session,slot,y', ...y.map((v, i) => `${treatment[i]},${block[i]},${position[i]},${v}`)].join('\n');
 }
 
-/** The demo campaign as a file. */
-function demoFile(): string {
-  const uuid = (last: string): string => `019aa000-0000-7000-8000-${last.padStart(12, '0')}`;
-  let head: Head = { campaign: uuid('1'), device: uuid('2'), seq: 0, hash: noHash, tick: 0 };
-  const acts = demoActs();
-  const events = acts.map(({ at, ...act }, i) => {
-    const random = Uint8Array.from({ length: 10 }, (_, byte) => (byte < 8 ? 1 : byte === 8 ? i >> 8 : i & 255));
-    const moment = { now: at, offset: 0, mono: at - (acts[0]?.at ?? 0), run: 'demo', app: 'test', random };
-    const made = makeEvent(act as never, head, moment);
-    if (!made.ok) throw new Error(JSON.stringify(made.error));
-    head = made.value.head;
-    return made.value.event;
-  });
-  const maker = { campaign: uuid('1'), title: 'demo', device: uuid('2'), at: '2026-01-01T00:00:00Z', app: 'test' };
-  return writeCampaignFile(events, maker);
-}
-
 /** Each starts a program and compiles it; on a busy machine that takes its time. */
 const PATIENCE = 120_000;
 
@@ -80,7 +61,7 @@ describe('npm run analyse', () => {
   test(
     'analyse campaign.file prints an analysis of every measurand of the demo',
     () => {
-      const { status, printed } = run('demo.evenload', demoFile());
+      const { status, printed } = run('demo.evenload', writeCampaignFile(demoEvents(), demoMaker));
       expect(status).toBe(0);
       expect(printed.analyses.length).toBeGreaterThan(0);
       const { treatments, result } = printed.analyses[0]!;

@@ -13,7 +13,7 @@ const quiet = 4;
 /**
  * Returns the QR symbol of a specimen code with medium error correction.
  *
- * **Checked by** test/e2e/print.spec.ts: the printed label is rendered and read by a decoder that shares no code.
+ * **Checked by** test/e2e/plan-print.spec.ts: the printed label is rendered and read by a decoder that shares no code.
  */
 export function qrPath(text: string): QrPath {
   const { data, size } = encode(text, { ecc: 'M', border: quiet });

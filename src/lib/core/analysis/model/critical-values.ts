@@ -10,6 +10,8 @@ export interface CriticalValues {
 }
 
 const NODES = 9;
+/** Degrees of freedom closer than this, relatively, are the same (as all pairs have in a balanced design). */
+const ROUNDING = 1e-11;
 
 /**
  * Prepares critical values for degrees of freedom in [from, to]. Few values are computed one by one; for many the
@@ -22,8 +24,14 @@ const NODES = 9;
 export function criticalValues(alpha: number, means: number, from: number, to: number, many: number): CriticalValues {
   const t = (df: number): number => tQuantile(1 - alpha / 2, df);
   const tukey = (df: number): number => (means < 2 ? NaN : tukeyUpperQuantile(alpha, means, df) / Math.SQRT2);
-  if (from === to || many <= 2 * NODES) return { t: remembered(t), tukey: remembered(tukey) };
+  if (to <= from * (1 + ROUNDING)) return { t: always(t, from), tukey: always(tukey, from) };
+  if (many <= 2 * NODES) return { t: remembered(t), tukey: remembered(tukey) };
   return { t: interpolated(t, from, to), tukey: interpolated(tukey, from, to) };
+}
+
+function always(f: (df: number) => number, df: number): () => number {
+  let value: number | null = null;
+  return () => (value ??= f(df));
 }
 
 function remembered(f: (df: number) => number): (df: number) => number {
