@@ -1,7 +1,14 @@
 import type { Machine, Plan } from '#lib/core/campaign/plan.ts';
 import type { ReadingState, RunState, SessionState } from '#lib/core/campaign/state.ts';
 import { readingOrder, type ReadingPlace } from '#lib/core/campaign/steps/due-readings.ts';
-import type { CheckRowView, MachineView, SlotCondition, SlotView, ValueView } from '#lib/ui/bench/view.ts';
+import type {
+  CheckRowView,
+  MachineView,
+  RunResultView,
+  SlotCondition,
+  SlotView,
+  ValueView
+} from '#lib/ui/bench/view.ts';
 import { writtenValue } from '#lib/ui/format/reading-text.ts';
 import { writer } from '#lib/ui/format/writer.svelte.ts';
 
@@ -108,7 +115,7 @@ export function checkRows(
   plan: Plan,
   machine: Machine,
   session: SessionState,
-  results: Map<number, string>
+  resultsOf: (slot: number) => RunResultView[]
 ): CheckRowView[] {
   const nothing: Focus = { slot: null, place: null, text: '', writing: false };
   return session.runs.map((run) => ({
@@ -117,7 +124,7 @@ export function checkRows(
     code: run.specimen,
     ruined: run.ruined?.reason ?? null,
     values: valuesOf(plan, run, nothing),
-    result: results.get(run.slot) ?? null,
+    results: resultsOf(run.slot),
     flagged: run.readings.flatMap(({ current }) => current?.raised.map(({ said }) => said) ?? [])
   }));
 }

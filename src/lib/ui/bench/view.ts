@@ -69,14 +69,22 @@ export interface LoadWarningView {
   spare: boolean;
 }
 
+/** A computed quantity of a run: written out, or why there is none; neither while it is being computed. */
+export interface RunResultView {
+  measurand: string;
+  label: string;
+  text: string | null;
+  why: string | null;
+}
+
 export interface CheckRowView {
   slot: number;
   name: string;
   code: string;
   ruined: string | null;
   values: ValueView[];
-  /** Measurand written out; null when it cannot be had. */
-  result: string | null;
+  /** What the run comes to. */
+  results: RunResultView[];
   flagged: string[];
 }
 

@@ -104,7 +104,21 @@ export const benchParts: typeof en = {
     none: 'Nichts war auffällig.',
     correct: 'Berichtigen',
     mean: 'Mittel',
-    measurand: 'Ergebnis'
+    measurand: 'Ergebnis',
+    noResult: {
+      missing: (reading) => `nicht berechnet: ${reading} fehlt.`,
+      undecided:
+        'nicht berechnet: Zwei Geräte sind sich über diese Messung nicht einig. In der Aufzeichnung entscheiden.',
+      limits: 'nicht berechnet: Die Messwerte blieben an Grenzen stehen, die nach beiden Seiten ziehen.',
+      divides: (text) => `lässt sich nicht berechnen: ${text} ist null. Die Messwerte noch einmal ansehen.`,
+      notReal: (text) =>
+        `lässt sich nicht berechnen: ${text} hat mit diesen Messwerten keine Lösung. Sie noch einmal ansehen.`,
+      notFinite: (text) =>
+        `lässt sich nicht berechnen: ${text} wächst über alle Zahlen. Die Messwerte noch einmal ansehen.`,
+      formula:
+        'lässt sich nicht berechnen: Die Formel des Plans ist nicht brauchbar. Die Messwerte sind sicher; bitte dem Planer sagen.',
+      notLoaded: 'hier nicht berechnet. Die Messwerte sind sicher; die Ergebnisse werden am Schreibtisch berechnet.'
+    }
   },
   missing: {
     title: (label, slot) => `Kein Messwert: ${label}, ${platz(slot)}`,

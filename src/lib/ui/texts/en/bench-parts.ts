@@ -103,7 +103,17 @@ export const benchParts = {
     none: 'Nothing was flagged.',
     correct: 'Correct',
     mean: 'mean',
-    measurand: 'Result'
+    measurand: 'Result',
+    noResult: {
+      missing: (reading: string) => `not computed: ${reading} is missing.`,
+      undecided: 'not computed: two devices differ about this run. Decide in the record.',
+      limits: 'not computed: its readings stopped at limits that pull to both sides.',
+      divides: (text: string) => `cannot be computed: ${text} is zero. Look at the readings again.`,
+      notReal: (text: string) => `cannot be computed: ${text} has no answer for these readings. Look at them again.`,
+      notFinite: (text: string) => `cannot be computed: ${text} grows beyond all numbers. Look at the readings again.`,
+      formula: 'cannot be computed: the formula of the plan cannot be used. The readings are safe; tell the engineer.',
+      notLoaded: 'not computed here. The readings are safe; the results are computed at the desk.'
+    }
   },
   missing: {
     title: (label: string, slot: string) => `No reading: ${label}, ${place(slot)}`,
