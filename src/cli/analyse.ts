@@ -1,18 +1,23 @@
 /**
- * The analysis without a screen: prints the whole result as JSON.
+ * The analysis without a screen: prints the whole result as JSON; a campaign file's report and data package are written too.
  *
  *     npm run --silent analyse -- campaign.file | readings.csv [options]      (--help lists them)
  *
  * Exit status 0: an analysis was printed; 2: the input cannot be read or analysed, and {"error": ...} was printed.
  */
-import { readFileSync } from 'node:fs';
+import { existsSync, readFileSync, writeFileSync } from 'node:fs';
+import { dirname } from 'node:path';
 import { parseArgs } from 'node:util';
 import { analyse } from '../lib/core/analysis/analyse.ts';
 import type { Observations } from '../lib/core/analysis/observations.ts';
+import type { Measurand } from '../lib/core/campaign/plan.ts';
+import type { CampaignState } from '../lib/core/campaign/state.ts';
 import { replay } from '../lib/core/campaign/replay.ts';
 import { readCampaignFile } from '../lib/core/exchange/read-campaign-file.ts';
 import { analysisInput, observedRows } from '../lib/state/analysis-input.ts';
+import type { MeasurandResult } from '../lib/state/all-results.ts';
 import { readingsFromCsv } from './readings-csv.ts';
+import { languages, packageFile, reportFile, type Language } from './result-files.ts';
 
 const HELP = `npm run --silent analyse -- FILE [options]
 
@@ -23,15 +28,17 @@ FILE is a campaign file, or a table of readings (CSV) with a header line:
 Options for a table (a campaign file brings its own):
   --control NAME    --direction lower|higher|NUMBER (a target)    --primary fixed|random    --alpha 0.05
   --margin NUMBER (equivalence)    --slots (in the model)    --ranks (readings are ranks or scores)    --seed 1
-Option for a campaign file:
+Options for a campaign file:
   --measurand ID    only this one; else all
+  --report FILE.html    writes the report: one file, no reference to anything outside    --language en|de of the report
+  --package FILE.zip    writes the data package: record and results as CSV with a descriptor
 
-Prints {"program", "file", "analyses": [{"measurand", "treatments", "sessions", "result"}]}. Positions count from 0 and stand for
+Prints {"program", "file", "damage", "written", "analyses": [{"measurand", "treatments", "sessions", "result"}]}. Positions count from 0 and stand for
 entries of treatments, sessions and input rows. "result" is described by src/lib/core/analysis/analysis-result.ts: each part is
 {"ok": true, "value": ...} or {"ok": false, "error": {"tag": ...}}; no number is ever NaN.`;
 
 interface Asked {
-  measurand: string | null;
+  measurand: Measurand | null;
   input: Observations;
 }
 
@@ -58,7 +65,10 @@ async function main(): Promise<number> {
         seed: { type: 'string', default: '1' },
         slots: { type: 'boolean', default: false },
         ranks: { type: 'boolean', default: false },
-        measurand: { type: 'string' }
+        measurand: { type: 'string' },
+        report: { type: 'string' },
+        package: { type: 'string' },
+        language: { type: 'string', default: 'en' }
       }
     });
   } catch (thrown) {
@@ -70,6 +80,11 @@ async function main(): Promise<number> {
     console.log(HELP);
     return values.help ? 0 : 2;
   }
+  const language = languages.find((one): one is Language => one === values.language);
+  if (language === undefined) return refuse({ tag: 'bad-option', why: `--language ${values.language}` });
+  for (const path of [values.report, values.package])
+    if (path !== undefined && !existsSync(dirname(path)))
+      return refuse({ tag: 'not-written', why: `no folder ${dirname(path)}`, written: [] });
   let bytes: Uint8Array;
   try {
     bytes = readFileSync(name);
@@ -78,17 +93,20 @@ async function main(): Promise<number> {
   }
   const campaign = readCampaignFile(bytes);
   let asked: Asked[];
+  let state: CampaignState | null = null;
   if (campaign.ok) {
-    const state = replay(
+    state = replay(
       campaign.value.events.map(({ event }) => event),
       campaign.value.header.campaign
     );
     asked = [];
-    for (const measurand of state.plan?.measurands ?? []) {
+    const primary = state.plan?.primary?.measurand;
+    const inOrder = (state.plan?.measurands ?? []).toSorted((a, b) => +(b.id === primary) - +(a.id === primary));
+    for (const measurand of inOrder) {
       if (values.measurand !== undefined && values.measurand !== measurand.id) continue;
       const rows = await observedRows(state, measurand);
       if (!rows.ok) return refuse(rows.error);
-      asked.push({ measurand: measurand.id, input: analysisInput(state, measurand, rows.value) });
+      asked.push({ measurand, input: analysisInput(state, measurand, rows.value) });
     }
     if (asked.length === 0)
       return refuse({ tag: 'no-measurand', known: state.plan?.measurands.map((m) => m.id) ?? [] });
@@ -109,14 +127,39 @@ async function main(): Promise<number> {
     if (!table.ok) return refuse(table.error);
     asked = [{ measurand: null, input: table.value }];
   } else return refuse(campaign.error);
+  if (state === null && (values.report !== undefined || values.package !== undefined))
+    return refuse({ tag: 'needs-campaign-file', why: 'a table of readings has no plan and no record to report' });
 
   const analyses = [];
+  const results: MeasurandResult[] = [];
   for (const { measurand, input } of asked) {
     const result = analyse(input);
-    if (!result.ok) return refuse({ measurand, ...result.error });
+    if (!result.ok) return refuse({ measurand: measurand?.id ?? null, ...result.error });
     const { treatments, sessions } = input;
-    analyses.push({ measurand, treatments, sessions, result: result.value });
+    if (measurand !== null) results.push({ measurand, input, analysis: result.value });
+    analyses.push({ measurand: measurand?.id ?? null, treatments, sessions, result: result.value });
   }
-  print({ program: 'evenload', file: name, damage: campaign.ok ? campaign.value.damage : null, analyses });
+  const written: string[] = [];
+  if (state !== null) {
+    const made = { state, results, file: name, bytes, app: version(), now: Date.now() };
+    try {
+      if (values.report !== undefined) {
+        writeFileSync(values.report, await reportFile(made, language));
+        written.push(values.report);
+      }
+      if (values.package !== undefined) {
+        writeFileSync(values.package, packageFile(made));
+        written.push(values.package);
+      }
+    } catch (thrown) {
+      return refuse({ tag: 'not-written', why: (thrown as Error).message, written });
+    }
+  }
+  print({ program: 'evenload', file: name, damage: campaign.ok ? campaign.value.damage : null, written, analyses });
   return 0;
+}
+
+function version(): string {
+  const file = new URL('../../package.json', import.meta.url);
+  return (JSON.parse(readFileSync(file, 'utf8')) as { version: string }).version;
 }

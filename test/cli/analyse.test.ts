@@ -1,7 +1,9 @@
 import { spawnSync } from 'node:child_process';
-import { mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { createHash } from 'node:crypto';
+import { existsSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
+import { unzipSync } from 'fflate';
 import { afterAll, describe, expect, test } from 'vitest';
 import type { Analysis } from '#lib/core/analysis/analysis-result.ts';
 import { writeCampaignFile } from '#lib/core/exchange/campaign-file.ts';
@@ -13,6 +15,7 @@ afterAll(() => rmSync(folder, { recursive: true }));
 
 interface Printed {
   analyses: { measurand: string | null; treatments: { name: string }[]; result: Analysis }[];
+  written?: string[];
   error?: { tag: string };
 }
 
@@ -34,6 +37,8 @@ function catalyst(): string {
   const { treatment, block, position, y } = file.data;
   return ['treatment,session,slot,y', ...y.map((v, i) => `${treatment[i]},${block[i]},${position[i]},${v}`)].join('\n');
 }
+
+const demoFile = writeCampaignFile(demoEvents(), demoMaker);
 
 /** Each starts a program and compiles it; on a busy machine that takes its time. */
 const PATIENCE = 120_000;
@@ -59,15 +64,57 @@ describe('npm run analyse', () => {
   );
 
   test(
-    'analyse campaign.file prints an analysis of every measurand of the demo',
+    'analyse campaign.file prints every measurand, writes a report without a reference outside and a package of every table',
     () => {
-      const { status, printed } = run('demo.evenload', writeCampaignFile(demoEvents(), demoMaker));
+      const [report, zip] = [join(folder, 'report.html'), join(folder, 'data.zip')];
+      const { status, printed } = run('demo.jsonl', demoFile, '--report', report, '--package', zip, '--language', 'de');
       expect(status).toBe(0);
-      expect(printed.analyses.length).toBeGreaterThan(0);
+      expect(printed.written).toEqual([report, zip]);
+      const html = readFileSync(report, 'utf8');
       const { treatments, result } = printed.analyses[0]!;
+      for (const { name } of treatments) expect(html).toContain(name);
       expect(treatments).toHaveLength(9);
       expect(result.counts.ruined).toBe(1);
-      expect(result.fixed.ok).toBe(true);
+      expect(html).toContain('<html lang="de">');
+      expect(html).toContain('Varianzanalyse');
+      expect(html).toContain(createHash('sha256').update(demoFile).digest('hex'));
+      expect(html).not.toMatch(/<script|<link|\ssrc=|href=|url\(|@import/);
+      const files = unzipSync(new Uint8Array(readFileSync(zip)));
+      const described = JSON.parse(new TextDecoder().decode(files['datapackage.json'])) as {
+        resources: { path: string; bytes: number; hash: string }[];
+      };
+      expect(described.resources.map(({ path }) => path).toSorted()).toEqual(
+        Object.keys(files).filter((path) => path !== 'datapackage.json').toSorted() // prettier-ignore
+      );
+      for (const { path, bytes, hash } of described.resources) {
+        expect(files[path]?.length, path).toBe(bytes);
+        expect(`sha256:${createHash('sha256').update(files[path]!).digest('hex')}`, path).toBe(hash);
+      }
+      expect(new TextDecoder().decode(files['demo.jsonl'])).toBe(demoFile);
+      const means = new TextDecoder().decode(files['results/means.csv']).trim().split('\r\n');
+      if (!result.fixed.ok || !result.random.ok) throw new Error('the demo can be fitted');
+      expect(means).toHaveLength(1 + 2 * treatments.length);
+    },
+    PATIENCE
+  );
+
+  test(
+    'analyse refuses a report of a bare table, a language it does not speak and a folder that is not there',
+    () => {
+      const report = join(folder, 'none.html');
+      expect(run('readings.csv', catalyst(), '--report', report)).toMatchObject({
+        status: 2,
+        printed: { error: { tag: 'needs-campaign-file' } }
+      });
+      expect(existsSync(report)).toBe(false);
+      expect(run('demo.jsonl', demoFile, '--report', report, '--language', 'xx')).toMatchObject({
+        status: 2,
+        printed: { error: { tag: 'bad-option' } }
+      });
+      expect(run('demo.jsonl', demoFile, '--report', join(folder, 'nowhere', 'report.html'))).toMatchObject({
+        status: 2,
+        printed: { error: { tag: 'not-written' } }
+      });
     },
     PATIENCE
   );

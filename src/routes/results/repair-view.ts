@@ -3,7 +3,7 @@ import type { RepairState } from '#lib/state/repair.svelte.ts';
 import type { NumberWriter } from '#lib/ui/format/number-writer.ts';
 import type { Finding } from '#lib/ui/results/findings.ts';
 import { choiceName, type RepairView } from '#lib/ui/results/repair-choice.ts';
-import type { ResultWords } from '#lib/ui/texts/results.ts';
+import type { ResultWords } from '#lib/ui/texts/result-words.ts';
 
 /** The ways on after ruin in the names that a person gave. */
 export function repairView(

@@ -5,7 +5,7 @@ import { drawOnPaper } from '../plots/ink.ts';
 import type { Scene } from '../plots/scene.ts';
 import type { ResultView } from '../results/view.ts';
 import type { report as reportTexts } from '../texts/en/report.ts';
-import type { ResultWords } from '../texts/results.ts';
+import type { ResultWords } from '../texts/result-words.ts';
 
 /** All that a report is made of; its words are handed in, so that it can be made without a screen. */
 export interface ReportContext {

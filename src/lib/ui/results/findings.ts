@@ -1,5 +1,5 @@
 import type { NumberWriter } from '../format/number-writer.ts';
-import type { ResultWords } from '../texts/results.ts';
+import type { ResultWords } from '../texts/result-words.ts';
 import { diagnosticChecks } from './diagnostic-checks.ts';
 import { bestFirst, countingLines, meanDecimals, modelLines, withUnit, type ResultView } from './view.ts';
 

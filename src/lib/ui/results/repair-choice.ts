@@ -1,4 +1,4 @@
-import type { ResultWords } from '../texts/results.ts';
+import type { ResultWords } from '../texts/result-words.ts';
 
 /** One way on after loss, with its price and what it brings. */
 export interface RepairChoice {

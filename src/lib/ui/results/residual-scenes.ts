@@ -2,7 +2,7 @@ import type { Diagnostics } from '../../core/analysis/analysis-result.ts';
 import type { NumberWriter } from '../format/number-writer.ts';
 import type { Scene } from '../plots/scene.ts';
 import { scatter, type ScatterOptions } from '../plots/scatter.ts';
-import type { ResultWords } from '../texts/results.ts';
+import type { ResultWords } from '../texts/result-words.ts';
 import { treatmentName, type ResultView } from './view.ts';
 import { runName } from './warning-words.ts';
 

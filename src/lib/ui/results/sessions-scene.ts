@@ -1,7 +1,7 @@
 import type { NumberWriter } from '../format/number-writer.ts';
 import type { Scene } from '../plots/scene.ts';
 import { scatter } from '../plots/scatter.ts';
-import type { ResultWords } from '../texts/results.ts';
+import type { ResultWords } from '../texts/result-words.ts';
 import { meanDecimals, sessionName, withUnit, type ResultView } from './view.ts';
 
 /** One session: its offset under both models and what it holds. */

@@ -1,21 +1,6 @@
-import { answer as answerEn } from './en/answer.ts';
-import { how as howEn } from './en/how.ts';
-import { layers as layersEn } from './en/layers.ts';
-import { reasons as reasonsEn } from './en/reasons.ts';
-import { results as resultsEn } from './en/results.ts';
-import { warnings as warningsEn } from './en/warnings.ts';
+import * as en from './en/all-results.ts';
 import { inLanguage } from './locale.svelte.ts';
+import type { ResultWords } from './result-words.ts';
 
-const en = {
-  answer: answerEn,
-  how: howEn,
-  layers: layersEn,
-  reasons: reasonsEn,
-  results: resultsEn,
-  warnings: warningsEn
-};
-
-export type ResultWords = typeof en;
-
-/** Everything the results say, by the kind of thing said. */
+/** Everything the results say, in the current language. */
 export const resultWords = inLanguage<ResultWords>({ en, de: () => import('./de/all-results.ts') });
