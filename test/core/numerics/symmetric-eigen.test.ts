@@ -10,6 +10,12 @@ describe('symmetricEigen', () => {
     [1, 1, 1, 5].forEach((v, i) => expect(values[i]).toBeCloseTo(v, 13));
   });
 
+  it('symmetricEigen(second differences of order 3) gives 2 − √2, 2 and 2 + √2', () => {
+    const { values } = symmetricEigen(Float64Array.of(2, -1, 0, -1, 2, -1, 0, -1, 2), 3);
+    [2 - Math.SQRT2, 2, 2 + Math.SQRT2].forEach((v, i) => expect(values[i]).toBeCloseTo(v, 12));
+    expect(() => symmetricEigen(new Float64Array(3), 2)).toThrow(RangeError);
+  });
+
   it('symmetricEigen(A) gives orthonormal vectors with A·v = λ·v, ascending', () => {
     const symmetric = fc.integer({ min: 1, max: 7 }).chain((n) =>
       fc.array(fc.double({ min: -10, max: 10, noNaN: true }), { minLength: n * n, maxLength: n * n }).map((v) => ({

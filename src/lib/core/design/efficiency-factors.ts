@@ -1,4 +1,4 @@
-import { symmetricEigenvalues } from '#lib/core/numerics/symmetric-eigenvalues.ts';
+import { symmetricEigen } from '#lib/core/numerics/symmetric-eigen.ts';
 import { connectedParts } from './connected-parts.ts';
 import { replications } from './concurrence.ts';
 import { informationMatrix } from './information-matrix.ts';
@@ -28,7 +28,7 @@ export function efficiencyFactors(blocks: readonly (readonly number[])[], treatm
     for (let j = 0; j < treatments; j++) c[i * treatments + j]! *= scale[i]! * scale[j]!;
   }
   const parts = connectedParts(blocks, treatments).length;
-  const factors = [...symmetricEigenvalues(c, treatments)].slice(parts);
+  const factors = [...symmetricEigen(c, treatments).values].slice(parts);
   const mean = parts === 1 && factors.length > 0 ? factors.length / factors.reduce((sum, e) => sum + 1 / e, 0) : 0;
   return { factors, mean };
 }

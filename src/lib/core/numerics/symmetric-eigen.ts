@@ -18,6 +18,7 @@ export interface SymmetricEigen {
  * Checked by: test/core/numerics/symmetric-eigen.test.ts
  */
 export function symmetricEigen(a: Float64Array, size: number): SymmetricEigen {
+  if (a.length !== size * size) throw new RangeError(`symmetricEigen: ${a.length} values, not ${size}×${size}`);
   if (size === 0) return { values: new Float64Array(0), vectors: new Float64Array(0) };
   // Scaled by a power of two (exactly), so that no square overflows; entries far below the rounding of the largest would
   // only feed subnormal numbers to the reduction, which costs it its orthogonality.

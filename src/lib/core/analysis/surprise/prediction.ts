@@ -36,11 +36,12 @@ export function mixture(parts: readonly Located[], df: number, alpha: number): O
     parts.reduce((s, { weight, mean, scale }) => s + weight * tUpper((mean - y) / scale, df), 0) / total;
   const widest = Math.max(...parts.map(({ mean, scale }) => Math.abs(mean - center) + scale));
   const edge = (tail: (y: number) => number, sign: 1 | -1) => {
-    if (tail(center) <= alpha / 2) return center;
+    const excess = (u: number) => Math.log(tail(center + sign * u * widest) / (alpha / 2));
+    let near = 0;
     let far = 2;
-    while (tail(center + sign * far * widest) > alpha / 2) far *= 2;
-    const found = findRoot((u) => Math.log(tail(center + sign * u * widest) / (alpha / 2)), 0, far, 1e-6);
-    return center + sign * found.root * widest;
+    while (excess(far) > 0) [near, far] = [far, 2 * far];
+    if (near === 0 && excess(0) <= 0) return center;
+    return center + sign * findRoot(excess, near, far, 1e-6).root * widest;
   };
   return {
     center,

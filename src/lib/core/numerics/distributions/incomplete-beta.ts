@@ -18,9 +18,20 @@ const MOST_TERMS = 200_000;
 export function betaKernel(x: number, y: number, a: number, b: number): number {
   if (x <= 0 || y <= 0) return 0;
   const n = a + b;
-  const exponent =
-    stirlingError(n) - stirlingError(a) - stirlingError(b) - halfDeviance(a, n * x) - halfDeviance(b, n * y);
+  const exponent = stirlingOf(a, b) - halfDeviance(a, n * x) - halfDeviance(b, n * y);
   return Math.exp(exponent) * Math.sqrt((a * b) / (2 * Math.PI * n));
+}
+
+/** Questions with the same degrees of freedom come in runs: what depends on these alone is kept for the next. */
+const last = { a: NaN, b: NaN, error: NaN };
+
+function stirlingOf(a: number, b: number): number {
+  if (last.a !== a || last.b !== b) {
+    last.a = a;
+    last.b = b;
+    last.error = stirlingError(a + b) - stirlingError(a) - stirlingError(b);
+  }
+  return last.error;
 }
 
 /**
