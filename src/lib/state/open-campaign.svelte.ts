@@ -1,23 +1,24 @@
 import type { CampaignEvent, DataOf, Kind, UnknownEvent } from '#lib/core/campaign/event.ts';
 import { lastUndoable } from '#lib/core/campaign/last-undoable.ts';
-import { freshEvents } from '#lib/core/campaign/fresh-events.ts';
-import { type BadData, type Head, makeEvent } from '#lib/core/campaign/make-event.ts';
+import { type BadData, makeEvent } from '#lib/core/campaign/make-event.ts';
 import type { Plan } from '#lib/core/campaign/plan.ts';
-import { Replay } from '#lib/core/campaign/replay.ts';
-import { noHash } from '#lib/core/campaign/seal.ts';
 import type { CampaignState } from '#lib/core/campaign/state.ts';
 import { summaryOf } from '#lib/core/campaign/summary.ts';
 import { fail, ok, type Result } from '#lib/core/result.ts';
-import { holdUpdates } from '#lib/pwa/busy.ts';
 import { remember } from '#lib/storage/canary.ts';
 import { draftsOf } from '#lib/storage/drafts.ts';
 import type { StorageFault } from '#lib/storage/fault.ts';
-import { append, load, type TakenDraft } from '#lib/storage/journal.ts';
+import { append, type TakenDraft } from '#lib/storage/journal.ts';
 import { tellOthers, whenOthersWrite } from './channel.ts';
 import { connection } from './database.svelte.ts';
 import { device } from './device.svelte.ts';
 import type { ExportedFile, ExportFault } from './make-export.ts';
+import { HoldWhileRunning } from './hold-while-running.ts';
+import { idle } from './idle.ts';
+import { OpenCampaignCheckpoint } from './open-campaign-checkpoint.ts';
 import { OpenCampaignDrafts } from './open-campaign-drafts.svelte.ts';
+import { OpenCampaignLog } from './open-campaign-log.ts';
+import { OpenCampaignUnwritten } from './open-campaign-unwritten.svelte.ts';
 import { stampNow } from './surroundings.ts';
 import { type Role, WriterLock } from './writer-lock.ts';
 
@@ -32,38 +33,44 @@ const planDraft = 'plan';
 /** A campaign as it is open in this tab. State changes after the write has completed, never before. */
 export class OpenCampaign {
   readonly id: string;
-  #events: Any[] = [];
-  #replay: Replay;
+  #log: OpenCampaignLog;
+  #checkpoint: OpenCampaignCheckpoint;
   #state: CampaignState = $state.raw() as CampaignState;
-  /** Copied only when somebody looks. */
-  #shownEvents: readonly Any[] = $derived(this.#events.slice(0, this.#state.events));
+  #whole = $state(true);
+  /** Copied only when somebody looks, again after every change. */
+  #shownEvents: readonly Any[] = $derived.by(() => (this.#state && this.#whole ? this.#log.events.slice() : []));
   #role = $state<Role>('following');
   #writes = $state(0);
   #drafts: OpenCampaignDrafts;
-  #unsaved = $state.raw<readonly CampaignEvent[]>([]);
-  #faults: readonly { what: string; detail: string }[] = [];
+  #unwritten = new OpenCampaignUnwritten();
   #queue: Promise<unknown> = Promise.resolve();
   #lock: WriterLock;
   #stopListening: () => void;
-  #letUpdate: (() => void) | null = null;
+  #hold = new HoldWhileRunning();
+  #closed = false;
 
-  constructor(id: string, events: Any[], drafts: Readonly<Record<string, unknown>>) {
+  constructor(id: string, log: OpenCampaignLog, drafts: Readonly<Record<string, unknown>>) {
     this.id = id;
-    this.#events = events;
+    this.#log = log;
+    this.#checkpoint = new OpenCampaignCheckpoint(log, () => this.#role === 'writing' && this.#writes === 0);
     this.#drafts = new OpenCampaignDrafts(id, drafts);
-    this.#replay = replayOf(id, events);
-    this.#state = this.#replay.state;
+    this.#state = log.state;
+    this.#whole = log.whole;
     this.#lock = new WriterLock(id, (role) => void this.#becomes(role));
     this.#stopListening = whenOthersWrite(id, () => void this.#inTurn(() => this.#catchUp()));
-    this.#holdWhileRunning();
+    this.#hold.look(this.#state);
   }
 
   get state(): CampaignState {
     return this.#state;
   }
-  /** Every event this tab holds, in the order they came to this device. */
+  /** Every event, in the order they came to this device; none as long as not all have been read (`whole`). */
   get events(): readonly Any[] {
     return this.#shownEvents;
+  }
+  /** All events have been read: after opening from a checkpoint that comes a little later. */
+  get whole(): boolean {
+    return this.#whole;
   }
   get role(): Role {
     return this.#role;
@@ -77,7 +84,7 @@ export class OpenCampaign {
     return this.#state.devices.find((one) => one.device === device.id)?.sinceExport ?? 0;
   }
   get lastUndoable(): CampaignEvent | null {
-    return lastUndoable(this.#shownEvents, device.id);
+    return this.#state && lastUndoable(this.#log.events, device.id);
   }
 
   /** Records one act for good: resolves after the device has durably written it. Clears the draft named, with it. */
@@ -111,53 +118,45 @@ export class OpenCampaign {
     attempt: number
   ): Promise<Result<CampaignEvent, WriteFault>> {
     if (this.#role === 'following') return fail({ tag: 'following' });
-    const made = makeEvent({ kind, data, who }, this.#head(), stampNow());
+    const make = () => makeEvent({ kind, data, who }, this.#log.headOf(device.id), stampNow());
+    let made = make();
+    if (!made.ok) return made;
+    const prepared = await this.#log.prepare(made.value.event);
+    if (!prepared.ok) return this.#failed(made.value.event, prepared.error);
+    // Reading the whole log anew may have found more.
+    if (made.value.event.seq !== this.#log.headOf(device.id).seq + 1) made = make();
     if (!made.ok) return made;
     const { event } = made.value;
-    this.#replay.apply(event);
-    const summary = summaryOf(this.#replay.state, device.id);
+    this.#log.apply(event);
+    const summary = summaryOf(this.#log.state, device.id);
     const written = await append(connection, made.value, summary, draft);
     if (!written.ok) {
-      this.#replay = replayOf(this.id, this.#events);
-      if (written.error.tag !== 'stale' || attempt >= 3) {
-        this.#failed(event, written.error);
-        return written;
-      }
+      this.#log.retract();
+      if (written.error.tag !== 'stale' || attempt >= 3) return this.#failed(event, written.error);
       await this.#catchUp();
       return this.#write(kind, data, draft, who, attempt + 1);
     }
-    this.#events.push(event);
+    this.#log.keep(event);
     this.#show();
+    this.#checkpoint.after(kind === 'session-closed' || kind === 'shift-closed');
     remember(device.id, summary, event.id, event.at, kind === 'exported');
     tellOthers(this.id);
     await this.#reportFaults();
     return ok(event);
   }
 
-  #failed(event: CampaignEvent, fault: StorageFault): void {
-    this.#unsaved = [...this.#unsaved, event];
-    const detail = 'detail' in fault ? fault.detail : '';
-    this.#faults = [...this.#faults, { what: fault.tag, detail: `${event.at} ${event.kind} ${detail}`.trim() }];
+  #failed(event: CampaignEvent, fault: StorageFault): Result<never, WriteFault> {
+    this.#unwritten.add(event, fault);
+    return fail(fault);
   }
 
-  /** A failure of the system is part of the record: it is written down as soon as writing works again. */
   async #reportFaults(): Promise<void> {
-    this.#unsaved = [];
-    const faults = this.#faults;
-    this.#faults = [];
-    for (const { what, detail } of faults)
-      await this.#write(
-        'device-fault',
-        { what: what.slice(0, 80), detail: detail.slice(0, 2000) },
-        null,
-        device.who,
-        1
-      );
+    for (const fault of this.#unwritten.clear()) await this.#write('device-fault', fault, null, device.who, 1);
   }
 
   /** Acts that could not be written, oldest first; empty again once a write has completed. */
   get unsaved(): readonly CampaignEvent[] {
-    return this.#unsaved;
+    return this.#unwritten.acts;
   }
 
   /**
@@ -166,18 +165,9 @@ export class OpenCampaign {
    */
   async rescueFile(): Promise<Result<ExportedFile, ExportFault>> {
     const { fileOf } = await import('./make-export.ts');
-    return fileOf([...this.#events, ...this.#unsaved], this.id, this.#state.title);
-  }
-
-  #head(): Head {
-    const own = this.#replay.state.devices.find((one) => one.device === device.id);
-    return {
-      campaign: this.id,
-      device: device.id,
-      seq: own?.seq ?? 0,
-      hash: own?.head ?? noHash,
-      tick: this.#replay.tick
-    };
+    // Reading may still work where writing does not; if not, there is what this tab holds.
+    await this.#readRest(() => Promise.resolve(true));
+    return fileOf([...this.#log.events, ...this.#unwritten.acts], this.id, this.#state.title);
   }
 
   #weighed(data: DataOf<'contradiction-decided'>): DataOf<'contradiction-decided'> {
@@ -228,20 +218,38 @@ export class OpenCampaign {
     // Held in memory before anything goes wrong: a rescue must not need to load its own program.
     void import('./make-export.ts').catch(() => undefined);
     this.#role = await this.#lock.start();
-    document.addEventListener('visibilitychange', this.#woken);
+    document.addEventListener('visibilitychange', this.#turned);
+    void this.#settle();
     return this;
   }
 
+  /** What can wait until the screen is there: the rest of the log, and a checkpoint for the next time. */
+  async #settle(): Promise<void> {
+    await this.#readRest(async () => {
+      await idle();
+      return !this.#closed;
+    });
+    await this.#checkpoint.save();
+  }
+
+  async #readRest(pause: () => Promise<boolean>): Promise<void> {
+    await this.#log.readRest(pause);
+    this.#whole = this.#log.whole;
+  }
+
   close(): void {
-    document.removeEventListener('visibilitychange', this.#woken);
+    this.#closed = true;
+    void this.#checkpoint.save();
+    document.removeEventListener('visibilitychange', this.#turned);
     this.#stopListening();
     this.#lock.close();
-    this.#letUpdate?.();
+    this.#hold.close();
   }
 
   /** A sleeping tab hears nothing: it reads again when it wakes. */
-  #woken = (): void => {
+  #turned = (): void => {
     if (document.visibilityState === 'visible') void this.#inTurn(() => this.#catchUp());
+    else void this.#checkpoint.save();
   };
 
   async #becomes(role: Role): Promise<void> {
@@ -250,30 +258,17 @@ export class OpenCampaign {
   }
 
   async #catchUp(): Promise<void> {
-    const loaded = await load(connection, this.id);
-    if (!loaded.ok) return;
-    const fresh = freshEvents(this.#events, loaded.value.events);
-    if (fresh.length === 0) return;
-    for (const event of fresh) this.#replay.apply(event);
-    this.#events.push(...fresh);
+    const more = await this.#log.catchUp();
+    if (!more.ok || !more.value) return;
     const drafts = await draftsOf(connection, this.id);
     if (drafts.ok) this.#drafts.adopt(drafts.value);
     this.#show();
   }
 
   #show(): void {
-    this.#state = this.#replay.state;
-    this.#holdWhileRunning();
-  }
-
-  /** No new version of the program takes over while a session runs. */
-  #holdWhileRunning(): void {
-    const running = this.#state.sessions.some(({ status }) => status === 'running' || status === 'reading');
-    if (running && !this.#letUpdate) this.#letUpdate = holdUpdates();
-    else if (!running && this.#letUpdate) {
-      this.#letUpdate();
-      this.#letUpdate = null;
-    }
+    this.#state = this.#log.state;
+    this.#whole = this.#log.whole;
+    this.#hold.look(this.#state);
   }
 
   #writing<T>(task: () => Promise<T>): Promise<T> {
@@ -289,19 +284,13 @@ export class OpenCampaign {
   }
 }
 
-function replayOf(id: string, events: readonly Any[]): Replay {
-  const replayed = new Replay(id);
-  for (const event of events) replayed.apply(event);
-  return replayed;
-}
-
 /** Opens a campaign in this tab: reads its log, replays it, finds out whether this tab writes. */
 export async function openCampaign(id: string): Promise<Result<OpenCampaign, OpenFault>> {
   await device.start();
   if (device.fault) return fail(device.fault);
-  const [loaded, drafts] = [await load(connection, id), await draftsOf(connection, id)];
-  if (!loaded.ok) return loaded;
+  const [log, drafts] = await Promise.all([OpenCampaignLog.open(id, device.id), draftsOf(connection, id)]);
+  if (!log.ok) return log;
   if (!drafts.ok) return drafts;
-  if (loaded.value.events.length === 0) return fail({ tag: 'no-campaign', id });
-  return ok(await new OpenCampaign(id, loaded.value.events, drafts.value).start());
+  if (log.value.state.events === 0) return fail({ tag: 'no-campaign', id });
+  return ok(await new OpenCampaign(id, log.value, drafts.value).start());
 }

@@ -12,7 +12,7 @@ export const listCampaigns = (connection: Connection): Promise<Result<CampaignSu
 /** Takes an invented demo off the device; anything that is not one is refused before a byte is touched. */
 export const removeDemoCampaign = (connection: Connection, id: string): Promise<Result<boolean, StorageFault>> =>
   connection.write(async (db) => {
-    const tx = db.transaction(['events', 'campaigns', 'drafts', 'quarantine'], 'readwrite');
+    const tx = db.transaction(['events', 'campaigns', 'drafts', 'quarantine', 'checkpoints'], 'readwrite');
     tx.done.catch(() => undefined);
     const summary = await tx.objectStore('campaigns').get(id);
     const isDemo = summary?.demo === true;
@@ -23,6 +23,7 @@ export const removeDemoCampaign = (connection: Connection, id: string): Promise<
       await Promise.all([
         ...keys.map((key) => tx.objectStore('events').delete(key)),
         tx.objectStore('drafts').delete(range),
+        tx.objectStore('checkpoints').delete(range),
         tx.objectStore('quarantine').delete(asides),
         tx.objectStore('campaigns').delete(id)
       ]);

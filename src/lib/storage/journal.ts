@@ -79,12 +79,37 @@ export function load(
   return connection.use(async (db) => {
     const stored = await db.getAllFromIndex('events', 'campaign', campaign);
     const loaded: LoadedLog = { events: [], unreadable: [] };
-    for (const one of stored) readOne(one, loaded, verify);
+    for (const one of stored) readStored(one, loaded, verify);
     return loaded;
   });
 }
 
-function readOne(stored: StoredEvent, loaded: LoadedLog, verify: boolean): void {
+/** One event by its id; null when it is not there or cannot be read. */
+export const loadEvent = (connection: Connection, id: string): Promise<Result<Any | null, StorageFault>> =>
+  connection.use(async (db) => {
+    const stored = await db.get('events', id);
+    const loaded: LoadedLog = { events: [], unreadable: [] };
+    if (stored) readStored(stored, loaded, false);
+    return loaded.events[0] ?? null;
+  });
+
+/** Some events of a campaign, device by device; `last` is where to go on, null at the end. */
+export const loadSome = (
+  connection: Connection,
+  campaign: string,
+  after: Place | null,
+  most: number
+): Promise<Result<LoadedLog & { last: Place | null }, StorageFault>> =>
+  connection.use(async (db) => {
+    const range = IDBKeyRange.bound(after ?? [campaign], [campaign, []], after !== null);
+    const stored = await db.getAllFromIndex('events', 'at', range, most);
+    const loaded: LoadedLog = { events: [], unreadable: [] };
+    for (const one of stored) readStored(one, loaded, false);
+    return { ...loaded, last: stored.length < most ? null : (stored.at(-1)?.at ?? null) };
+  });
+
+/** Reads a kept event; what it finds goes to one list or the other. */
+export function readStored(stored: StoredEvent, loaded: LoadedLog, verify: boolean): void {
   const refuse = (path: string, cause: string): void => void loaded.unreadable.push({ id: stored.id, path, cause });
   let value: unknown;
   try {

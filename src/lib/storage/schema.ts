@@ -16,9 +16,11 @@ export type Place = [campaign: string, device: string, seq: number, fork: string
 /** A part of a campaign's checkpoint; it can always be made again from the events. */
 export interface StoredCheckpoint {
   campaign: string;
-  /** 'core', or the id of a session. */
+  /** `core`, `stamp`, `s:` and a session's id (what is needed at once), `e:` and a session's id (its events). */
   part: string;
   text: string;
+  /** Of a session: its runs. */
+  runs?: string;
 }
 
 /** Something typed that is not an event yet. */

@@ -6,6 +6,9 @@ import type { RunTally } from './summary.ts';
 
 type Any = CampaignEvent | UnknownEvent;
 
+/** To be raised whenever the same events come to another state, or a checkpoint to another form. */
+export const replayVersion = 1;
+
 /** A device's chain as far as it has been read. */
 export interface DeviceCheckpoint {
   state: DeviceState;

@@ -98,6 +98,11 @@ export class Replay {
     return this.#held.count;
   }
 
+  /** Are there sessions whose events it does not hold? */
+  get cold(): boolean {
+    return this.#cold.size > 0;
+  }
+
   /** The state of everything taken in so far; parts that did not change are the same objects as before. */
   get state(): CampaignState {
     this.#state ??= this.#reduce();

@@ -65,6 +65,7 @@ export const record: typeof en = {
   files: 'Dateien und Störungen',
   noEvents: 'Davon ist nichts aufgezeichnet.',
   flagsTitle: 'Was die Aufzeichnung über sich selbst sagt',
+  readingAll: (n: number) => `${n} Ereignisse werden gelesen …`,
   noFlags: 'Alle Ketten sind heil: keine Lücke, keine Gabelung, keine Änderung, keine gesprungene Uhr.',
   devicesTitle: 'Geräte',
   chain: 'Ereignisse',

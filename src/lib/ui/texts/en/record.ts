@@ -69,6 +69,7 @@ export const record = {
   files: 'files and faults',
   noEvents: 'Nothing of this sort is recorded.',
   flagsTitle: 'What the record says about itself',
+  readingAll: (n: number) => `Reading ${n} events …`,
   noFlags: 'Every chain is whole: no gap, no fork, no edit, no clock that jumped.',
   devicesTitle: 'Devices',
   chain: 'Events',
