@@ -74,7 +74,7 @@ export async function openBench(page: Page, origin: string, desk: Desk, who = 'T
   const stored = desk.events.map(({ event, text, seal }) => ({
     id: event.id,
     campaign: event.campaign,
-    place: `${event.campaign}/${event.device}/${event.seq}`,
+    at: [event.campaign, event.device, event.seq, ''],
     text,
     seal
   }));

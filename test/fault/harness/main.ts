@@ -7,6 +7,7 @@ import { replay } from '#lib/core/campaign/replay.ts';
 import { stateHash } from '#lib/core/campaign/state-hash.ts';
 import { load } from '#lib/storage/journal.ts';
 import { issued, specimen } from '../../core/campaign/story.ts';
+import '../../../src/hooks.client.ts';
 
 /**
  * The page a robot types on: a field whose text is kept as a draft at every stroke and recorded at Enter, and a mark

@@ -12,6 +12,8 @@ export default defineConfig({
     target: 'es2023',
     outDir: '../../../node_modules/.fault-harness',
     emptyOutDir: true,
+    // The app's own policy lets its workers through by where they lie.
+    assetsDir: '_app/immutable',
     modulePreload: { polyfill: false }
   }
 });

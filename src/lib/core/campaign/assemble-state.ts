@@ -24,7 +24,11 @@ export function assembleState({ campaign, held, plan, sessions, places }: StateP
   const overall = inOrder(held.overall);
   const created = overall.find((event) => event.kind === 'campaign-created');
   const standing = overall.filter((event) => !held.spoken.undone(event));
-  const reduced = issued?.sessions.flatMap(({ id }) => sessions.get(id) ?? []) ?? [];
+  const reduced: ReducedSession[] = [];
+  for (const { id } of issued?.sessions ?? []) {
+    const one = sessions.get(id);
+    if (one) reduced.push(one);
+  }
   const devices = [...held.devices.values()].sort((a, b) => (a.device < b.device ? -1 : 1));
   const twice = places.contradictions.map(([, one]) => one);
   return {
@@ -39,7 +43,7 @@ export function assembleState({ campaign, held, plan, sessions, places }: StateP
     sessions: reduced.map(({ state }) => state),
     shifts: reduceShifts(standing),
     notes: standing.flatMap((event) => (event.kind === 'noted' ? [noteOf(event)] : [])),
-    contradictions: [...plan.contradictions, ...reduced.flatMap((one) => one.contradictions), ...twice],
+    contradictions: [...plan.contradictions, ...gathered(reduced, (one) => one.contradictions), ...twice],
     flags: [...devices.flatMap((log) => log.flags), ...ownFlags(held, sessions, reduced)],
     notUnderstood: inOrder(held.unknown),
     devices: devices.map((log) => log.state),
@@ -59,15 +63,20 @@ function ownFlags(
     detail
   });
   const unknown = inOrder(held.unknown).map((event) => flag('not-understood', event, event.kind));
-  const strangers = reduced.flatMap(({ strangers: list }) =>
-    list.map((event) => flag('unknown-specimen', event, event.data.specimen))
+  const strangers = gathered(reduced, (one) => one.strangers).map((event) =>
+    flag('unknown-specimen', event, event.data.specimen)
   );
-  const targets = held.spoken.targets.flatMap(([target, events]) =>
-    held.has(target) ? [] : events.map((event) => flag('orphan', event, target))
-  );
-  const nowhere = [...held.sessions].flatMap(([session, events]) =>
-    sessions.has(session) ? [] : events.map((event) => flag('orphan', event, session))
-  );
+  const targets = held.orphans.flatMap(([target, events]) => events.map((event) => flag('orphan', event, target)));
+  const nowhere: RecordFlag[] = [];
+  for (const [session, events] of held.sessions)
+    if (!sessions.has(session)) for (const event of events) nowhere.push(flag('orphan', event, session));
   const byEvent = (a: RecordFlag, b: RecordFlag): number => ((a.event ?? '') < (b.event ?? '') ? -1 : 1);
   return [...unknown, ...strangers, ...[...targets, ...nowhere].sort(byEvent)];
+}
+
+/** What few sessions of many have, without a list for each: this runs at every event. */
+function gathered<T>(sessions: readonly ReducedSession[], of: (one: ReducedSession) => readonly T[]): T[] {
+  const found: T[] = [];
+  for (const one of sessions) for (const each of of(one)) found.push(each);
+  return found;
 }

@@ -26,6 +26,8 @@ export class HeldEvents {
   #ids = new Map<string, Any>();
   /** Events that are spoken of, are in the log and not here. */
   #elsewhere = new Set<string>();
+  /** Events that something speaks of and the log does not hold; null: to be found again. */
+  #orphans: [string, CampaignEvent[]][] | null = null;
   #count = 0;
   #tick = 0;
   #last: { event: Any; tick: number } | null = null;
@@ -61,6 +63,12 @@ export class HeldEvents {
     return this.#ids.has(id) || this.#elsewhere.has(id);
   }
 
+  /** Events that something speaks of and the log does not hold, with what speaks of them. */
+  get orphans(): readonly [string, CampaignEvent[]][] {
+    this.#orphans ??= this.spoken.targets.filter(([id]) => !this.has(id));
+    return this.#orphans;
+  }
+
   /** Takes an event in; false when its id is held already. */
   add(event: Any): boolean {
     if (this.#ids.has(event.id)) return false;
@@ -82,6 +90,7 @@ export class HeldEvents {
     const { event, tick } = this.#last;
     this.#last = null;
     this.#ids.delete(event.id);
+    this.#forgetOrphans(event);
     this.#count--;
     this.#tick = tick;
     if (!this.devices.get(event.device)?.removeLast()) this.devices.delete(event.device);
@@ -98,6 +107,11 @@ export class HeldEvents {
 
   #keep(event: Any): void {
     this.#ids.set(event.id, event);
+    this.#forgetOrphans(event);
+  }
+
+  #forgetOrphans(event: Any): void {
+    if ((isKnown(event) && isSpeaking(event)) || this.spoken.speaksOf(event.id)) this.#orphans = null;
   }
 
   #sort(event: CampaignEvent): void {

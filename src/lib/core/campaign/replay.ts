@@ -250,7 +250,7 @@ export class Replay {
       planning,
       unknown,
       speaking: spoken.all,
-      absent: spoken.targets.flatMap(([id]) => (this.#held.has(id) ? [] : [id])),
+      absent: this.#held.orphans.map(([id]) => id),
       nowhere: [...sessions].flatMap(([session, events]) => (this.#planned.has(session) ? [] : events)),
       twice: this.#places.contradictions,
       aside: [...this.#places.aside],

@@ -37,6 +37,11 @@ export class SpokenOf {
     return [...this.#undoing, ...this.#reinstating];
   }
 
+  /** Does any event speak of this one? */
+  speaksOf(id: string): boolean {
+    return this.#undoing.has(id) || this.#reinstating.has(id);
+  }
+
   undone = (event: CampaignEvent): boolean => this.#undoing.has(event.id) && isUndoable(event);
 
   decisionsOn = (key: string): readonly Decision[] =>

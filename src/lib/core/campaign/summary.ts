@@ -45,18 +45,25 @@ export const rememberTally = (session: SessionState, tally: RunTally): void => v
 
 /** The summary of a campaign as this device sees it. Cost: the number of sessions, and the readings of those that are new. */
 export function summaryOf(state: CampaignState, device: string): CampaignSummary {
-  const sessions = state.sessions.filter(({ status }) => status !== 'dropped');
-  const tally = sessions.map(tallyOf);
+  let [sessions, closed, runs, runsDone] = [0, 0, 0, 0];
+  for (const session of state.sessions) {
+    if (session.status === 'dropped') continue;
+    const tally = tallyOf(session);
+    sessions++;
+    if (session.status === 'closed') closed++;
+    runs += tally.runs;
+    runsDone += tally.done;
+  }
   return {
     id: state.id,
     title: state.title,
     demo: state.demo,
     createdAt: state.created?.at ?? null,
     issued: state.issued !== null,
-    sessions: sessions.length,
-    sessionsClosed: sessions.filter(({ status }) => status === 'closed').length,
-    runs: tally.reduce((sum, { runs }) => sum + runs, 0),
-    runsDone: tally.reduce((sum, { done }) => sum + done, 0),
+    sessions,
+    sessionsClosed: closed,
+    runs,
+    runsDone,
     events: state.events,
     notExported: state.devices.find((one) => one.device === device)?.sinceExport ?? 0,
     undecided: state.contradictions.filter(({ decided }) => decided === null).length
