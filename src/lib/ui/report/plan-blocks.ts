@@ -3,6 +3,9 @@ import { timeText } from '../format/time-text.ts';
 import { unitText } from '../format/unit-text.ts';
 import { column, heading, paragraph, type ReportContext, row, table } from './report-context.ts';
 
+/** As many significant digits as the number has. */
+const digitsOf = (value: number): number => (value.toExponential().split('e')[0] ?? '').replace(/\D/g, '').length;
+
 /** The plan as issued and amended, and the loading order that chance gave. */
 export function planBlocks({ campaign, report, words, write }: ReportContext): Block[] {
   const { issued, plan } = campaign;
@@ -36,7 +39,7 @@ export function planBlocks({ campaign, report, words, write }: ReportContext): B
           {
             name: t.constants,
             value: plan.constants
-              .map((c) => `${c.label}: ${write.significant(c.value, 6)} ${unitText(c.unit)}`.trim())
+              .map((c) => `${c.label}: ${write.significant(c.value, digitsOf(c.value))} ${unitText(c.unit)}`.trim())
               .join('; ')
           }
         ]

@@ -50,7 +50,8 @@ export function readingBlocks(context: ReportContext): Block[] {
       const last = run.readings.flatMap((r) => (r.current ? [r.current] : [])).at(-1);
       return {
         cells: [
-          t.runName(write.whole(session.plan.number), String(run.slot + 1)),
+          // Kept on one line: else a narrow column makes three lines of every row.
+          t.runName(write.whole(session.plan.number), String(run.slot + 1)).replaceAll(' ', '\u00a0'),
           names.get(run.treatment) ?? run.treatment,
           run.specimen,
           ...cells,

@@ -1,3 +1,4 @@
+import { pIs } from '../p-value.ts';
 import type { layers as en } from '../en/layers.ts';
 
 export const layers: typeof en = {
@@ -69,8 +70,8 @@ export const layers: typeof en = {
     title: 'Belegungen',
     finding: (spread, trend) => `Die Belegungen lagen zwischen ${spread} von ihrem Durchschnitt. ${trend}`,
     spread: (low, high) => `${low} und ${high}`,
-    drift: (slope, p) => `Sie laufen um ${slope} je Belegung davon (p = ${p}).`,
-    noDrift: (p) => `Eine Drift zeigt sich nicht (p = ${p}).`,
+    drift: (slope, p) => `Sie laufen um ${slope} je Belegung davon (${pIs(p)}).`,
+    noDrift: (p) => `Eine Drift zeigt sich nicht (${pIs(p)}).`,
     noTest: '',
     picture: 'Abweichungen der Belegungen in Ladereihenfolge',
     pictureSummary: 'Wie weit jede Belegung von der durchschnittlichen lag, in der Reihenfolge, in der sie liefen.',
@@ -136,7 +137,7 @@ export const layers: typeof en = {
     within: 'zwischen Läufen einer Belegung',
     sd: 'Standardabweichung',
     share: 'Anteil',
-    test: (p) => `Test auf fehlende Belegungsvarianz: p = ${p}.`,
+    test: (p) => `Test auf fehlende Belegungsvarianz: ${pIs(p)}.`,
     zero: 'Die Belegungsvarianz wurde mit null geschätzt: die Belegungen unterschieden sich nicht mehr, als der Zufall es täte.',
     design: 'Der Plan, der geblieben ist',
     planned: 'Wie geplant',
@@ -213,7 +214,7 @@ export const layers: typeof en = {
     treatment: 'Variante',
     ruinedRuns: 'Verworfen',
     keptRuns: 'Zählend',
-    association: (p) => `Verteilt sich das Verwerfen auf die Varianten, wie der Zufall es täte? p = ${p}.`,
+    association: (p) => `Verteilt sich das Verwerfen auf die Varianten, wie der Zufall es täte? ${pIs(p)}.`,
     turned: 'Urteile, die sich ändern',
     list: 'Verworfene Läufe und warum',
     reason: 'Grund',
@@ -256,7 +257,7 @@ export const layers: typeof en = {
   },
   ranks: {
     title: 'Ränge',
-    finding: (p) => `Allein nach Rängen unterscheiden sich die Varianten mit p = ${p}.`,
+    finding: (p) => `Allein nach Rängen unterscheiden sich die Varianten mit ${pIs(p)}.`,
     durbin: 'Durbin',
     skillingsMack: 'Skillings–Mack',
     friedman: 'Friedman',
@@ -294,7 +295,7 @@ export const layers: typeof en = {
     se: 'Standardfehler',
     interval: (level) => `${level}-Intervall`,
     sigma: (s) => `Streuung zwischen Läufen: ${s} (Maximum-Likelihood).`,
-    test: (p) => `Unterschied der Varianten: p = ${p}.`
+    test: (p) => `Unterschied der Varianten: ${pIs(p)}.`
   },
   record: {
     title: 'Aufzeichnung',

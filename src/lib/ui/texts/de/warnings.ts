@@ -57,7 +57,7 @@ export const warnings: typeof en = {
     act: 'Unter „Verworfene Läufe“ mit und ohne vergleichen und die Ursache im Bericht nennen.'
   }),
   verdictTurns: (pairs) => ({
-    said: `Nähme man die verworfenen Messwerte für bare Münze, würden ${pairs} Vergleiche anders ausgehen.`,
+    said: `Nähme man die verworfenen Messwerte für bare Münze, ${pairs === '1' ? 'würde ein Vergleich' : `würden ${pairs} Vergleiche`} anders ausgehen.`,
     act: 'Siehe „Verworfene Läufe“. Das Urteil hängt daran, sie wegzulassen: im Bericht begründen.'
   }),
   limits: (runs) => ({
@@ -65,7 +65,7 @@ export const warnings: typeof en = {
     act: 'Siehe „Messwerte an der Grenze“ für die Auswertung, die das berücksichtigt.'
   }),
   disagree: (pairs) => ({
-    said: `Die beiden Arten, Belegungen zu behandeln, urteilen in ${pairs} Vergleichen verschieden.`,
+    said: `Die beiden Arten, Belegungen zu behandeln, urteilen in ${pairs === '1' ? 'einem Vergleich' : `${pairs} Vergleichen`} verschieden.`,
     act: 'Es zählt die im Plan festgelegte Auswertung; die andere daneben berichten.'
   }),
   single: (sessions) => ({

@@ -1,3 +1,4 @@
+import { pIs } from '../p-value.ts';
 /** The layers under the answer: title, finding in one line, heads of tables and pictures. */
 export const layers = {
   comparisons: {
@@ -64,8 +65,8 @@ export const layers = {
     title: 'Sessions',
     finding: (spread: string, trend: string) => `Sessions lay between ${spread} of their average. ${trend}`,
     spread: (low: string, high: string) => `${low} and ${high}`,
-    drift: (slope: string, p: string) => `They drift by ${slope} a session (p = ${p}).`,
-    noDrift: (p: string) => `No drift is shown (p = ${p}).`,
+    drift: (slope: string, p: string) => `They drift by ${slope} a session (${pIs(p)}).`,
+    noDrift: (p: string) => `No drift is shown (${pIs(p)}).`,
     noTest: '',
     picture: 'Session offsets in loading order',
     pictureSummary: 'How far each session lay from the average session, in the order they were run.',
@@ -132,7 +133,7 @@ export const layers = {
     within: 'between runs of a session',
     sd: 'Standard deviation',
     share: 'Share',
-    test: (p: string) => `Test of no session variance: p = ${p}.`,
+    test: (p: string) => `Test of no session variance: ${pIs(p)}.`,
     zero: 'The session variance was estimated as zero: sessions differed no more than chance.',
     design: 'The design that is left',
     planned: 'As planned',
@@ -207,7 +208,7 @@ export const layers = {
     treatment: 'Treatment',
     ruinedRuns: 'Ruined',
     keptRuns: 'Kept',
-    association: (p: string) => `Is ruin spread over the treatments as chance would do it? p = ${p}.`,
+    association: (p: string) => `Is ruin spread over the treatments as chance would do it? ${pIs(p)}.`,
     turned: 'Verdicts that turn',
     list: 'Ruined runs and why',
     reason: 'Reason',
@@ -249,7 +250,7 @@ export const layers = {
   },
   ranks: {
     title: 'Ranks',
-    finding: (p: string) => `By ranks alone, the treatments differ with p = ${p}.`,
+    finding: (p: string) => `By ranks alone, the treatments differ with ${pIs(p)}.`,
     durbin: 'Durbin',
     skillingsMack: 'Skillings–Mack',
     friedman: 'Friedman',
@@ -287,7 +288,7 @@ export const layers = {
     se: 'Standard error',
     interval: (level: string) => `${level} interval`,
     sigma: (s: string) => `Scatter between runs: ${s} (maximum likelihood).`,
-    test: (p: string) => `Treatments differ: p = ${p}.`
+    test: (p: string) => `Treatments differ: ${pIs(p)}.`
   },
   record: {
     title: 'Record',

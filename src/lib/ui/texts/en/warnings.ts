@@ -1,5 +1,7 @@
 import { pIs } from '../p-value.ts';
 
+const comparisons = (n: string): string => (n === '1' ? 'one comparison' : `${n} comparisons`);
+
 /** Each warning: what was seen, and what to do. Numbers arrive written. */
 export const warnings = {
   parts: (parts: string) => ({
@@ -57,7 +59,7 @@ export const warnings = {
     act: 'Compare with and without under Ruined runs, and name the cause in the report.'
   }),
   verdictTurns: (pairs: string) => ({
-    said: `With the ruined readings taken at face value, ${pairs} comparisons would turn.`,
+    said: `With the ruined readings taken at face value, ${comparisons(pairs)} would turn.`,
     act: 'See Ruined runs. The verdict hangs on leaving them out: say why in the report.'
   }),
   limits: (runs: string) => ({
@@ -65,7 +67,7 @@ export const warnings = {
     act: 'See Readings at a limit for the analysis that allows for it.'
   }),
   disagree: (pairs: string) => ({
-    said: `The two ways to treat sessions give different verdicts for ${pairs} comparisons.`,
+    said: `The two ways to treat sessions give different verdicts for ${comparisons(pairs)}.`,
     act: 'The analysis fixed in the plan counts; report the other beside it.'
   }),
   single: (sessions: string) => ({
