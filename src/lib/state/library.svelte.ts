@@ -3,6 +3,7 @@ import { type BadData, type Head, makeEvent, type Sealed } from '#lib/core/campa
 import { replay } from '#lib/core/campaign/replay.ts';
 import { noHash } from '#lib/core/campaign/seal.ts';
 import { type CampaignSummary, summaryOf } from '#lib/core/campaign/summary.ts';
+import { judgeOrigin, type Origin, type SignatureCheck } from '#lib/core/exchange/judge-origin.ts';
 import { fail, ok, type Result } from '#lib/core/result.ts';
 import { holdUpdates } from '#lib/pwa/busy.ts';
 import { forget, remember } from '#lib/storage/canary.ts';
@@ -17,11 +18,14 @@ import { tellOthers, whenOthersWrite } from './channel.ts';
 import { connection } from './database.svelte.ts';
 import type { Act } from './demo/demo-acts.ts';
 import { device } from './device.svelte.ts';
+import { checkSignature } from './signing.ts';
+import { tablets } from './tablets.svelte.ts';
 import { newId, stampNow, timeNow } from './surroundings.ts';
 
 /** A file that was read and summed up; nothing of it is on this device until it is accepted. */
 export interface ProposedImport extends ProposedFile {
   name: string;
+  signature: SignatureCheck;
   /** Holds the file's events. */
   worker: ImportWorker;
 }
@@ -124,7 +128,11 @@ class Library {
     await device.start();
     const worker = new ImportWorker();
     const read = await watched(worker, options, () => worker.propose(file));
-    if (read.ok) return ok({ ...read.value, name: file.name, worker });
+    if (read.ok) {
+      const { header, footer } = read.value;
+      await tablets.start();
+      return ok({ ...read.value, name: file.name, worker, signature: await checkSignature(header, footer) });
+    }
     worker.stop();
     return read;
   }
@@ -135,10 +143,17 @@ class Library {
     return read.ok ? ok({ ...proposed, ...read.value }) : read;
   }
 
+  /** Where a proposed file comes from, as far as is known now. */
+  originOf({ signature, ...file }: ProposedImport): Origin {
+    return judgeOrigin(file, signature, tablets.accepted, tablets.fingerprint);
+  }
+
   /** Takes an accepted file in. One transaction: all of it is here afterwards, or nothing. */
   async accept(proposed: ProposedImport, options: ImportOptions = {}): Promise<Result<TakenFile, AcceptFault>> {
     const { name, worker } = proposed;
-    const order = { device: device.id, who: device.who, name, stamp: stampNow() };
+    const origin = this.originOf(proposed);
+    const key = 'fingerprint' in origin ? origin.fingerprint : null;
+    const order = { device: device.id, who: device.who, name, stamp: stampNow(), origin: origin.tag, key };
     let taken = await watched(worker, options, () => worker.take(order));
     if (!taken.ok && 'note' in taken.error) taken = await this.#wasTaken(proposed, taken.error);
     if (!taken.ok) return taken;

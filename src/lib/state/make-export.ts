@@ -6,6 +6,7 @@ import type { StorageFault } from '#lib/storage/fault.ts';
 import { load } from '#lib/storage/journal.ts';
 import { connection } from './database.svelte.ts';
 import { device } from './device.svelte.ts';
+import { signFile, type SigningFault } from './signing.ts';
 import { timeNow } from './surroundings.ts';
 
 /** A campaign file that was read back and found whole. */
@@ -18,6 +19,8 @@ export interface ExportedFile {
   /** Sequence number of this device's last event in it. */
   upTo: number;
   bytes: number;
+  /** Why it bears no signature; null when it does. */
+  unsigned: SigningFault | null;
 }
 
 /** Why there is no file that can be trusted. */
@@ -42,15 +45,18 @@ export async function fileOf(
   title: string
 ): Promise<Result<ExportedFile, ExportFault>> {
   const at = timeNow();
-  const body = fileBody(events, { campaign, title, device: device.id, at, app: __APP_VERSION__ });
-  const blob = new Blob([closeFile(body, null)], { type: 'application/jsonl' });
+  const maker = { campaign, title, device: device.id, at, app: __APP_VERSION__ };
+  const body = fileBody(events, maker);
+  const signature = await signFile(maker, body);
+  const blob = new Blob([closeFile(body, signature.ok ? signature.value : null)], { type: 'application/jsonl' });
   const read = readCampaignFile(new Uint8Array(await blob.arrayBuffer()));
   if (!read.ok) return fail({ tag: 'read-back-failed', error: read.error, file: null });
   const { damage, events: found, sha256 } = read.value;
   if (damage !== null || found.length !== events.length)
     return fail({ tag: 'read-back-failed', error: null, file: read.value });
+  const unsigned = signature.ok ? null : signature.error;
   const upTo = Math.max(0, ...events.filter((one) => one.device === device.id).map(({ seq }) => seq));
-  return ok({ blob, name: fileName(title, at), sha256, events: events.length, upTo, bytes: blob.size });
+  return ok({ blob, name: fileName(title, at), sha256, events: events.length, upTo, bytes: blob.size, unsigned });
 }
 
 /** A name that every file system takes; it says nothing that the file does not say itself. */

@@ -24,3 +24,16 @@ export const settleSetting = (
     await tx.done;
     return held ?? value;
   });
+
+/** Changes a value in one transaction, so that two tabs do not undo each other, and returns the new one. */
+export const changeSetting = <T>(
+  connection: Connection,
+  name: string,
+  change: (held: unknown) => T
+): Promise<Result<T, StorageFault>> =>
+  connection.write(async (db) => {
+    const tx = db.transaction('settings', 'readwrite', { durability: 'strict' });
+    const changed = change(await tx.store.get(name));
+    await Promise.all([tx.store.put(changed, name), tx.done]);
+    return changed;
+  });

@@ -102,7 +102,9 @@ export class ImportJob {
       hash: own?.head ?? noHash,
       tick: replay.tick
     };
-    const data = { sha256, added: summary.added, known: summary.known, name: order.name.slice(0, 300) };
+    const { origin, key, name } = order;
+    const counts = { added: summary.added, known: summary.known };
+    const data = { sha256, ...counts, name: name.slice(0, 300), origin, ...(key === null ? {} : { key }) };
     return makeEvent({ kind: 'imported', data, who: order.who }, head, order.stamp);
   }
 

@@ -25,6 +25,9 @@ export interface TakeOrder {
   /** Name of the file. */
   name: string;
   stamp: Stamp;
+  /** What is known of where the file comes from, and the fingerprint of the key that signed it. */
+  origin: string;
+  key: string | null;
 }
 
 export interface TakenFile {

@@ -6,6 +6,7 @@ import { writeCampaignFile } from '#lib/core/exchange/campaign-file.ts';
 import { readCampaignFile } from '#lib/core/exchange/read-campaign-file.ts';
 import { weighImport } from '#lib/core/exchange/summarise-import.ts';
 import { campaign, deviceA, deviceB, Recorder } from '../campaign/story.ts';
+import { signedFile } from './signed-file.ts';
 
 const maker = { campaign, title: 'T', device: deviceA, at: '2026-03-02T08:00:00.000+01:00', app: '0.0.0' };
 const bytesOf = (text: string): Uint8Array => new TextEncoder().encode(text);
@@ -27,8 +28,12 @@ describe('readCampaignFile', () => {
     );
   });
 
-  it('readCampaignFile(file with one changed byte) never passes as undamaged, whichever byte and bit', () => {
-    const bytes = bytesOf(text);
+  it('readCampaignFile(signed file with one changed byte) never passes as undamaged, whichever byte and bit', async () => {
+    const { text: signed, check } = await signedFile(story().events, maker);
+    const bytes = bytesOf(signed);
+    const whole = readCampaignFile(bytes);
+    expect(whole.ok && whole.value.damage).toBeNull();
+    expect(whole.ok && (await check(whole.value))).toBe(true);
     for (let at = 0; at < bytes.length; at++) {
       const changed = Uint8Array.from(bytes);
       changed[at] = (changed[at] ?? 0) ^ (1 << (at % 8));

@@ -134,7 +134,10 @@ export const kinds = {
     sha256: v.pipe(v.string(), v.regex(/^[0-9a-f]{64}$/)),
     added: natural,
     known: natural,
-    name: text(300)
+    name: text(300),
+    /** What was known of where the file came from when it was taken in, and the fingerprint of the key that signed it. */
+    origin: v.exactOptional(text(40)),
+    key: v.exactOptional(v.pipe(v.string(), v.regex(/^[0-9a-f]{64}$/)))
   }),
   'device-fault': v.strictObject({ what: text(80), detail: text(2000) })
 } as const;

@@ -23,18 +23,38 @@ export const HeaderSchema = v.strictObject({
   app: text(40)
 });
 
-/** The writing device's signature over the footer's SHA-256. */
-export const SignatureSchema = v.strictObject({
-  algorithm: v.picklist(['ECDSA-P256-SHA256', 'Ed25519']),
-  /** Public key, SPKI, base64. */
-  key: text(400),
-  value: text(400)
+/** 32 bytes as base64url, as a JSON Web Key writes a coordinate (RFC 7518, 6.2.1). */
+const coordinate = v.pipe(v.string(), v.regex(/^[\w-]{43}$/));
+
+/** A device's public signing key as a JSON Web Key with nothing but what makes the key. */
+export const PublicKeySchema = v.strictObject({
+  kty: v.literal('EC'),
+  crv: v.literal('P-256'),
+  x: coordinate,
+  y: coordinate
 });
+
+/** Version of the signature that this program makes and can check. */
+export const signatureVersion = 1;
+
+/**
+ * The writing device's signature. Version 1: ECDSA on P-256 with SHA-256 (FIPS 186-5) over the UTF-8 bytes of
+ * `signedStatement`; `value` is r and s, 32 bytes each, as base64url. A later version is carried, not understood.
+ */
+export const SignatureSchema = v.union([
+  v.strictObject({
+    version: v.literal(signatureVersion),
+    key: PublicKeySchema,
+    value: v.pipe(v.string(), v.regex(/^[\w-]{86}$/))
+  }),
+  v.looseObject({ version: v.pipe(v.number(), v.integer(), v.minValue(signatureVersion + 1)) })
+]);
 
 /** Last line: how many events, and the SHA-256 of every byte before this line. */
 export const FooterSchema = v.strictObject({
   events: count,
   sha256: hash,
+  /** null: the device could not sign. */
   signature: v.nullable(SignatureSchema),
   /** SHA-256 of the canonical JSON of the footer without this field, so that a changed footer is noticed too. */
   seal: hash
@@ -42,4 +62,6 @@ export const FooterSchema = v.strictObject({
 
 export type FileHeader = v.InferOutput<typeof HeaderSchema>;
 export type FileFooter = v.InferOutput<typeof FooterSchema>;
-export type FileSignature = v.InferOutput<typeof SignatureSchema>;
+export type PublicKey = v.InferOutput<typeof PublicKeySchema>;
+/** A signature of the version that is understood here. */
+export type FileSignature = v.InferOutput<(typeof SignatureSchema)['options'][0]>;
