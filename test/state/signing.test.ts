@@ -9,7 +9,7 @@ const maker = { campaign, title: 'T', device: deviceA, at: '2026-03-02T08:00:00.
 const body = fileBody(new Recorder(deviceA).begin().events, maker);
 
 /** The program as it starts anew on the same device. */
-async function startAnew(): Promise<typeof import('#lib/state/signing.ts')> {
+async function startAnew() {
   vi.resetModules();
   return import('#lib/state/signing.ts');
 }
@@ -65,7 +65,7 @@ describe('signFile', () => {
   });
 
   it('signFile(file) whose key cannot be made fails with a reason and does not throw', async () => {
-    indexedDB = new IDBFactory();
+    vi.stubGlobal('indexedDB', new IDBFactory());
     const { signFile } = await startAnew();
     vi.spyOn(crypto.subtle, 'generateKey').mockRejectedValueOnce(new Error('no entropy'));
     expect(await signFile(maker, body)).toMatchObject({ ok: false, error: { tag: 'no-key' } });
