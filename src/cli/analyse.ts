@@ -9,6 +9,7 @@ import { existsSync, readFileSync, writeFileSync } from 'node:fs';
 import { dirname } from 'node:path';
 import { parseArgs } from 'node:util';
 import { analyse } from '../lib/core/analysis/analyse.ts';
+import { parseContrast, type ContrastFault } from '../lib/core/analysis/comparisons/parse-contrast.ts';
 import type { Observations } from '../lib/core/analysis/observations.ts';
 import type { Measurand } from '../lib/core/campaign/plan.ts';
 import type { CampaignState } from '../lib/core/campaign/state.ts';
@@ -16,6 +17,7 @@ import { replay } from '../lib/core/campaign/replay.ts';
 import { readCampaignFile } from '../lib/core/exchange/read-campaign-file.ts';
 import { analysisInput, observedRows } from '../lib/state/analysis-input.ts';
 import type { MeasurandResult } from '../lib/state/all-results.ts';
+import { fail, ok, type Result } from '../lib/core/result.ts';
 import { readingsFromCsv } from './readings-csv.ts';
 import { languages, packageFile, reportFile, type Language } from './result-files.ts';
 
@@ -66,6 +68,7 @@ async function main(): Promise<number> {
         slots: { type: 'boolean', default: false },
         ranks: { type: 'boolean', default: false },
         measurand: { type: 'string' },
+        contrast: { type: 'string', multiple: true, default: [] },
         report: { type: 'string' },
         package: { type: 'string' },
         language: { type: 'string', default: 'en' }
@@ -133,7 +136,9 @@ async function main(): Promise<number> {
   const analyses = [];
   const results: MeasurandResult[] = [];
   for (const { measurand, input } of asked) {
-    const result = analyse(input);
+    const questions = withContrasts(input, values.contrast);
+    if (!questions.ok) return refuse({ measurand, ...questions.error });
+    const result = analyse(questions.value);
     if (!result.ok) return refuse({ measurand: measurand?.id ?? null, ...result.error });
     const { treatments, sessions } = input;
     if (measurand !== null) results.push({ measurand, input, analysis: result.value });
@@ -162,4 +167,21 @@ async function main(): Promise<number> {
 function version(): string {
   const file = new URL('../../package.json', import.meta.url);
   return (JSON.parse(readFileSync(file, 'utf8')) as { version: string }).version;
+}
+
+/** The input with the questions that were typed; the fault names the question that was not understood. */
+function withContrasts(
+  input: Observations,
+  texts: readonly string[]
+): Result<Observations, { tag: 'bad-question'; text: string; fault: ContrastFault }> {
+  const contrasts = [];
+  for (const text of texts) {
+    const read = parseContrast(
+      text,
+      input.treatments.map(({ name }) => name)
+    );
+    if (!read.ok) return fail({ tag: 'bad-question', text, fault: read.error });
+    contrasts.push({ name: text, weights: [...read.value] });
+  }
+  return ok({ ...input, contrasts });
 }

@@ -120,6 +120,26 @@ describe('npm run analyse', () => {
   );
 
   test(
+    'analyse --contrast tests a typed question, and names one that it does not understand',
+    () => {
+      // Adjusted means of the catalyst example are 71.375, 71.625, 72 and 75 (D. C. Montgomery).
+      const asked = run('readings.csv', catalyst(), '--contrast', '"4" - ("1" + "2")/2', '--contrast', '"3" - "1"');
+      expect(asked.status).toBe(0);
+      const { comparisons } = asked.printed.analyses[0]!.result;
+      if (!comparisons.fixed.ok) throw new Error(comparisons.fixed.error.tag);
+      const estimates = comparisons.fixed.value.contrasts.map(({ result }) =>
+        result.ok ? result.value.estimate : null
+      );
+      expect(estimates).toEqual([75 - (71.375 + 71.625) / 2, 72 - 71.375].map((v) => expect.closeTo(v, 9)));
+      expect(run('readings.csv', catalyst(), '--contrast', '"4" - Z')).toMatchObject({
+        status: 2,
+        printed: { error: { tag: 'bad-question', fault: { tag: 'unknown-name' } } }
+      });
+    },
+    PATIENCE
+  );
+
+  test(
     'analyse prints the fault and ends with status 2 where a file cannot be analysed',
     () => {
       expect(run('empty.csv', 'treatment,session,y\nA,1,\nB,1,')).toMatchObject({
