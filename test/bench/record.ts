@@ -51,7 +51,7 @@ async function newPage(throttle = 1): Promise<Page> {
   const page = await context.newPage();
   page.on('pageerror', (error) => console.error(`uncaught: ${error.message}`));
   await page.goto(origin);
-  await page.waitForSelector('body[data-ready=yes]');
+  await page.waitForSelector('body[data-ready=yes]', { state: 'attached' });
   const devtools = await context.newCDPSession(page);
   await devtools.send('Emulation.setCPUThrottlingRate', { rate: throttle });
   return page;
@@ -90,7 +90,7 @@ try {
   page = await newPage();
   const first = await page.evaluate((one) => window.bench.open(one), id);
   row('first opening, no checkpoint', `${(first.ms / 1000).toFixed(2)} s`);
-  await page.waitForFunction((one) => window.bench.kept(one), id, { timeout: 120_000, polling: 500 });
+  await page.evaluate((one) => window.bench.kept(one), id);
   await page.evaluate(() => window.bench.close());
   await page.close();
 

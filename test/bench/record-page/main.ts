@@ -93,10 +93,13 @@ const bench = {
     await new Promise((resolve) => setTimeout(resolve, 300));
     return { propose: between - from, accept: end - between, tasks: [...longTasks], campaign };
   },
-  /** Has the campaign a checkpoint? */
-  async kept(id: string): Promise<boolean> {
-    const found = await connection.use((db) => db.get('checkpoints', [id, 'core']));
-    return found.ok && found.value !== undefined;
+  /** Resolves when the campaign has a checkpoint. */
+  async kept(id: string): Promise<void> {
+    for (;;) {
+      const found = await connection.use((db) => db.get('checkpoints', [id, 'core']));
+      if (found.ok && found.value !== undefined) return;
+      await new Promise((resolve) => setTimeout(resolve, 200));
+    }
   },
   get whole(): boolean {
     return open?.whole ?? false;
