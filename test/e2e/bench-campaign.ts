@@ -70,7 +70,7 @@ export class Desk {
 /** Puts the campaign on the device of the page as if it had been brought in, and opens its bench. */
 export async function openBench(page: Page, origin: string, desk: Desk, who = 'Test person'): Promise<void> {
   await page.goto(`${origin}/bench?c=${benchCampaign}`);
-  await page.locator('[role=alert]').waitFor();
+  await page.locator('[role=alert], .bench h1').first().waitFor();
   const stored = desk.events.map(({ event, text, seal }) => ({
     id: event.id,
     campaign: event.campaign,

@@ -61,11 +61,16 @@ export async function fileOf(
 
 /** A name that every file system takes; it says nothing that the file does not say itself. */
 export function fileName(title: string, at: string): string {
+  const stamp = at.slice(0, 16).replace(/[-:]/g, '').replace('T', '-');
+  return `${plainName(title)}-${stamp}.jsonl`;
+}
+
+/** A title in letters that every file system takes. */
+export function plainName(title: string): string {
   const plain = title
     .normalize('NFKD')
     .replace(/[^\w]+/g, '-')
     .replace(/^-+|-+$/g, '')
     .slice(0, 40);
-  const stamp = at.slice(0, 16).replace(/[-:]/g, '').replace('T', '-');
-  return `${plain || 'campaign'}-${stamp}.jsonl`;
+  return plain || 'campaign';
 }

@@ -90,7 +90,11 @@ export const bench: typeof en = {
         ? 'Alles auf diesem Gerät ist ausgegeben.'
         : `${n} ${n === 1 ? 'Eintrag dieses Geräts ist' : 'Einträge dieses Geräts sind'} nur hier. Spätestens am Schichtende ausgeben.`,
     mirror: (name, time) => `Nach ${name} kopiert um ${time}.`,
-    mirrorLate: 'Die Kopie in der Datei hinkt hinterher.'
+    mirrorLate: 'Die Kopie in der Datei hinkt hinterher.',
+    mirrorBehind: 'Kopie veraltet',
+    mirrorPaused: 'Kopie ruht: weiter',
+    mirrorAsk:
+      'Die Kopie im Ordner wartet: der Browser fragt nach jedem Start neu um Erlaubnis. Tippen, um fortzufahren.'
   },
   follow: {
     title: 'Ein anderer Tab zeichnet diese Kampagne auf',

@@ -93,7 +93,10 @@ export const bench = {
         ? 'Everything on this device has been exported.'
         : `${plural(n, 'entry', 'entries')} of this device ${n === 1 ? 'is' : 'are'} only here. Export at the end of the shift at the latest.`,
     mirror: (name: string, time: string) => `Copied to ${name} at ${time}.`,
-    mirrorLate: 'The copy in the file is behind.'
+    mirrorLate: 'The copy in the file is behind.',
+    mirrorBehind: 'copy is behind',
+    mirrorPaused: 'copying paused: go on',
+    mirrorAsk: 'The copy in the folder waits: the browser asks for permission anew after each start. Tap to go on.'
   },
   follow: {
     title: 'Another tab records this campaign',
