@@ -4,6 +4,7 @@ import type { Finding, SlipCandidate } from '#lib/core/campaign/checks/finding.t
 import type { ReadingDefinition } from '#lib/core/campaign/plan.ts';
 import { placeKey, type ReadingPlace } from '#lib/core/campaign/steps/due-readings.ts';
 import type { Book } from './book.ts';
+import { TypedAhead } from './typed-ahead.ts';
 
 type Source = DataOf<'reading-recorded'>['source'];
 
@@ -50,6 +51,7 @@ export class ReadingEntry {
   #place = $state.raw<EntryPlace | null>(null);
   #source: Source = 'keyboard';
   #line = '';
+  readonly #ahead = new TypedAhead();
   /** When it was read, for readings that come from paper. */
   readAt = $state<string | null>(null);
 
@@ -104,16 +106,18 @@ export class ReadingEntry {
     this.#problem = null;
     this.#doubt = null;
     this.#fault = null;
+    this.#goOn();
   }
 
   /** The text as the field holds it after a keystroke. */
   type(text: string): void {
-    this.#set(text, 'keyboard');
+    if (this.#writing) this.#ahead.field(text, this.#text);
+    else this.#set(text, 'keyboard');
   }
 
   /** A key of the program's own keypad. */
   press(key: string): void {
-    if (this.#writing) return;
+    if (this.#writing) return this.#ahead.key(key);
     const fresh = this.#doubt ? '' : this.#text;
     const source: Source = fresh === '' || this.#source === 'keypad' ? 'keypad' : 'keyboard';
     if (key === 'Backspace') this.#set([...this.#text].slice(0, -1).join(''), source);
@@ -133,6 +137,7 @@ export class ReadingEntry {
   /** Enter: understood and not doubted, it is written. */
   async enter(): Promise<void> {
     const place = this.#place;
+    if (this.#writing) this.#ahead.enter();
     if (!place || this.#writing) return;
     const parsed = this.#parse(this.#text, place);
     if (!parsed.ok) {
@@ -194,6 +199,7 @@ export class ReadingEntry {
     this.#writing = false;
     if (findings.length === 0) return this.#write(place, understood, raw, [], null);
     const candidates = findings.flatMap((finding) => (finding.check === 'slip' ? finding.candidates : []));
+    this.#ahead.drop();
     this.#doubt = { understood, raw, findings, candidates };
   }
 
@@ -230,6 +236,7 @@ export class ReadingEntry {
     );
     this.#writing = false;
     if (!result.ok) {
+      this.#ahead.drop();
       this.#fault = result.error;
       return;
     }
@@ -239,7 +246,19 @@ export class ReadingEntry {
     if (nameOf(this.#place) === nameOf(place)) {
       this.#text = '';
       this.#line = '';
-    }
+    } else this.#goOn();
+  }
+
+  /** What was typed while the reading before was being written belongs to the one that is due now. */
+  #goOn(): void {
+    if (this.#writing) return;
+    const next = this.#place ? this.#ahead.take() : null;
+    if (!next) return this.#ahead.drop();
+    this.#set(next.text, next.source);
+    if (!next.entered) return;
+    void this.enter();
+    // A line that is asked about stops what follows it: the next place is not certain.
+    if (this.writing) this.#ahead.putBack(next.rest);
   }
 }
 
