@@ -110,18 +110,44 @@ async function walk(page: Page, origin: string, look: Look): Promise<void> {
   await second_.close();
 }
 
+/**
+ * What can be tapped and is smaller than 48 px either way. A control inside its label is as large as the label; a field
+ * that no finger can reach (visually hidden) is no target.
+ */
+const smallTargets = (page: Page): Promise<string[]> =>
+  page.evaluate(() => {
+    const scope = document.querySelector('dialog[open]') ?? document.querySelector('.bench');
+    const targets = scope?.querySelectorAll<HTMLElement>(
+      'button, input, select, textarea, a[href], summary, [role=radio]'
+    );
+    return [...(targets ?? [])].flatMap((target) => {
+      if (!target.checkVisibility({ visibilityProperty: true }) || target.closest('.visually-hidden')) return [];
+      const box = (target.closest('label') ?? target).getBoundingClientRect();
+      // A screen rounds to its own pixels; half a pixel is no difference to a finger.
+      if (box.width >= 47.5 && box.height >= 47.5) return [];
+      const name = target.getAttribute('aria-label') ?? target.textContent?.trim() ?? '';
+      return [`${target.localName} “${name.slice(0, 40)}” ${box.width.toFixed(0)}×${box.height.toFixed(0)}`];
+    });
+  });
+
 for (const size of sizes)
-  test(`every state of the bench at ${size.width}×${size.height} is kept as a picture`, async ({ page, app }) => {
+  test(`every state of the bench at ${size.width}×${size.height} is kept as a picture, with targets of 48 px`, async ({
+    page,
+    app
+  }) => {
     test.setTimeout(120_000);
     await page.setViewportSize(size);
     const seen: string[] = [];
+    const small: string[] = [];
     await walk(page, app.origin, async (state) => {
       await keepPicture(page, `bench-${state}-${size.name}`);
       seen.push(state);
+      small.push(...(await smallTargets(page)).map((target) => `${state}: ${target}`));
       const wide = await page.evaluate(() => document.documentElement.scrollWidth - innerWidth);
       expect(wide, `${state} scrolls sideways`).toBeLessThanOrEqual(0);
     });
     expect(seen).toContain('next');
+    expect(small, 'targets under 48 px').toEqual([]);
   });
 
 for (const scheme of ['light', 'dark'] as const)
