@@ -44,8 +44,15 @@ export function findingText(finding: Finding, of: Quantity, plan: Plan | null): 
   const value = quantity(finding.value, natural);
   switch (finding.check) {
     case 'impossible':
-    case 'unexpected':
+    case 'unexpected': {
+      const measurand = plan?.measurands.find(({ id }) => id === finding.measurand);
+      if (measurand) {
+        const its = { decimals: measurand.decimals, unit: unitText(measurand.unit) };
+        const range = rangeText(finding.range, { ...its, decimals: 0 });
+        return t.measurandOutside[finding.check](measurand.label, quantity(finding.value, its), finding.side, range);
+      }
       return t[finding.check](value, finding.side, rangeText(finding.range, natural));
+    }
     case 'slip': {
       const [first] = finding.candidates;
       return first ? t.slip(quantity(first.value, natural), first.how) : '';

@@ -24,6 +24,9 @@ function recorded(upTo: number, changed: Plan = plan, values = loss): Recorder {
   return recorder;
 }
 
+/** The plan with a measurand that may be anything. */
+const unlimited: Plan = { ...plan, measurands: [{ ...plan.measurands[0]!, expected: { min: null, max: null } }] };
+
 const place = (definition = plan.readings[0]!): EntryPlace => ({
   session: 's4',
   slot: 2,
@@ -40,7 +43,7 @@ test('allChecksFor(state, place, value) is silent about a value like those befor
 });
 
 test('allChecksFor(state, place, value) is surprised inside the expected range, and offers the slip that explains it', async () => {
-  const state = replay(recorded(11).events);
+  const state = replay(recorded(11, unlimited).events);
   const wide = { ...plan.readings[0]!, expected: { min: 0.1, max: 190 } };
   const right = loss(4, 2);
   const odd = await allChecksFor(state, place(wide), typed(String(right * 4)));
@@ -56,7 +59,7 @@ test('allChecksFor(state, place, value) carries the surprise of a formula back t
   const changed: Plan = {
     ...plan,
     constants: [{ id: 'start', label: 'Start', value: 2, unit: 'µm' }],
-    measurands: [{ ...plan.measurands[0]!, id: 'gain', label: 'Gain', formula: '3 * loss - start' }]
+    measurands: [{ ...unlimited.measurands[0]!, id: 'gain', label: 'Gain', formula: '3 * loss - start' }]
   };
   const state = replay(recorded(11, changed).events);
   const tenfold = Number((loss(4, 2) * 10).toFixed(1));
@@ -67,12 +70,43 @@ test('allChecksFor(state, place, value) carries the surprise of a formula back t
   expect(slip!.check === 'slip' && slip!.candidates[0]!.value).toBeCloseTo(tenfold / 10, 9);
 });
 
-test('allChecksFor(state, place, value) leaves ranks, limited readings and the first readings alone', async () => {
+test('allChecksFor(state, place, value) leaves ranks and limited readings alone', async () => {
   const rank: Plan = { ...plan, measurands: [{ ...plan.measurands[0]!, kind: 'rank' }] };
   expect(await allChecksFor(replay(recorded(11, rank).events), place(), typed('30'))).toEqual([]);
   const limited = { ...typed('30'), limit: 'at-least' as const };
   expect(await allChecksFor(replay(recorded(11).events), place(), limited)).toEqual([]);
-  expect(await allChecksFor(replay(recorded(3).events), place(), typed('30'))).toEqual([]);
+});
+
+test('allChecksFor(state, place, value) names a slip by the sister readings while the model is silent', async () => {
+  const wide = { ...plan.readings[0]!, expected: { min: null, max: null } };
+  const early = replay(recorded(2).events);
+  expect(await allChecksFor(early, place(wide), typed('36'))).toMatchObject([
+    { check: 'slip', candidates: [{ value: 3.6, how: 'decimal' }] }
+  ]);
+  expect(await allChecksFor(early, place(wide), typed('6'))).toEqual([]);
+  expect(await allChecksFor(replay(recorded(0).events), place(wide), typed('36'))).toEqual([]);
+});
+
+test('allChecksFor(state, place, value) names a measurand outside its own limits', async () => {
+  const measurand = { ...plan.measurands[0]!, id: 'gain', formula: 'loss - start', expected: { min: 0, max: 4 } };
+  const changed: Plan = {
+    ...plan,
+    constants: [{ id: 'start', label: 'Start', value: 2, unit: 'µm' }],
+    measurands: [{ ...measurand, possible: { min: 0, max: null } }]
+  };
+  const state = replay(recorded(2, changed).events);
+  const wide = { ...plan.readings[0]!, expected: { min: null, max: null } };
+  expect(await allChecksFor(state, place(), typed('4.5'))).toEqual([]);
+  expect(await allChecksFor(state, place(wide), typed('41.5'))).toMatchObject([
+    { check: 'unexpected', value: 39.5, measurand: 'gain' },
+    { check: 'slip', candidates: [{ value: 4.15 }] }
+  ]);
+  expect(await allChecksFor(state, place(), typed('7'))).toMatchObject([
+    { check: 'unexpected', value: 5, side: 'above', measurand: 'gain' }
+  ]);
+  expect(await allChecksFor(state, place(), typed('1.1'))).toMatchObject([
+    { check: 'impossible', value: expect.closeTo(-0.9, 9), side: 'below', measurand: 'gain' }
+  ]);
 });
 
 test('allChecksFor(state, place, value) does not count a ruined run', async () => {

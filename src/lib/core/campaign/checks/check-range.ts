@@ -1,5 +1,5 @@
 import type { Range } from '../plan.ts';
-import type { Finding } from './finding.ts';
+import type { OutsideRange } from './finding.ts';
 
 /** On which side of a range a value lies; null inside or where no limit is set. A limit itself is inside. */
 export function sideOutside(value: number, range: Range): 'below' | 'above' | null {
@@ -17,7 +17,7 @@ export function sideOutside(value: number, range: Range): 'below' | 'above' | nu
  * @param expected limits that the engineer expects
  * Checked by: test/core/campaign/checks/check-range.test.ts
  */
-export function checkRange(value: number, possible: Range, expected: Range): Finding | null {
+export function checkRange(value: number, possible: Range, expected: Range): OutsideRange | null {
   const cannot = sideOutside(value, possible);
   if (cannot) return { check: 'impossible', value, side: cannot, range: possible };
   const odd = sideOutside(value, expected);

@@ -21,18 +21,22 @@ const inch = 25.4;
 export function checkSlip(value: number, plain: string, expected: Range): SlipCandidate[] {
   const { min, max } = expected;
   if (min === null || max === null || sideOutside(value, expected) === null) return [];
+  const middle = (min + max) / 2;
+  const likely = slipCandidates(value, plain)
+    .filter((c) => sideOutside(c.value, expected) === null)
+    .sort((a, b) => Math.abs(a.value - middle) - Math.abs(b.value - middle));
+  return likely.filter((c, i) => likely.findIndex((d) => d.value === c.value) === i).slice(0, 3);
+}
+
+/** Every other number that a value could have been meant to be, likely or not. */
+export function slipCandidates(value: number, plain: string): SlipCandidate[] {
   const candidates: SlipCandidate[] = [];
   for (const factor of decimalShifts)
     candidates.push({ value: shifted(plain, Math.round(Math.log10(factor))), how: 'decimal', factor });
   candidates.push({ value: tidy(value * inch), how: 'inch', factor: inch });
   candidates.push({ value: tidy(value / inch), how: 'inch', factor: 1 / inch });
   for (const swapped of swaps(plain)) candidates.push({ value: swapped, how: 'swapped-digits', factor: 1 });
-
-  const middle = (min + max) / 2;
-  const likely = candidates
-    .filter((c) => Number.isFinite(c.value) && c.value !== value && sideOutside(c.value, expected) === null)
-    .sort((a, b) => Math.abs(a.value - middle) - Math.abs(b.value - middle));
-  return likely.filter((c, i) => likely.findIndex((d) => d.value === c.value) === i).slice(0, 3);
+  return candidates.filter((one) => Number.isFinite(one.value) && one.value !== value);
 }
 
 /** The typed digits with the decimal sign moved; reads the digits anew, so that 0.07 becomes 0.7 and not 0.7000000000000001. */

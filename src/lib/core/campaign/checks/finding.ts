@@ -9,10 +9,18 @@ export interface SlipCandidate {
   factor: number;
 }
 
+/** A reading outside its limits, or a measurand outside its own: then it is named. */
+export interface OutsideRange {
+  check: 'impossible' | 'unexpected';
+  value: number;
+  side: 'below' | 'above';
+  range: Range;
+  measurand?: string;
+}
+
 /** What a check has to say about one value; words are made from it in one place. A check warns and never blocks. */
 export type Finding =
-  | { check: 'impossible'; value: number; side: 'below' | 'above'; range: Range }
-  | { check: 'unexpected'; value: number; side: 'below' | 'above'; range: Range }
+  | OutsideRange
   | { check: 'slip'; value: number; candidates: SlipCandidate[] }
   | { check: 'stuck'; value: number; times: number }
   | { check: 'surprise'; value: number; measurand: string; low: number; high: number; center: number }

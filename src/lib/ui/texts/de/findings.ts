@@ -13,6 +13,12 @@ export const findings: typeof en = {
           : '',
   impossible: (value, side, range) => `${value} kann nicht sein: ${seite[side]} dem Möglichen (${range}).`,
   unexpected: (value, side, range) => `${value} liegt ${seite[side]} dem Erwarteten (${range}).`,
+  measurandOutside: {
+    impossible: (label, value, side, range) =>
+      `${label}: ${value}. Das kann nicht sein: ${side === 'below' ? 'weniger' : 'mehr'} als möglich (${range}).`,
+    unexpected: (label, value, side, range) =>
+      `${label}: ${value}, ${side === 'below' ? 'weniger' : 'mehr'} als erwartet (${range}).`
+  },
   slip: (meant, how) =>
     ({
       decimal: `Komma verrutscht? ${meant} wäre zu erwarten.`,

@@ -12,6 +12,12 @@ export const findings = {
     `${value} cannot be: it is ${side} what is possible (${range}).`,
   unexpected: (value: string, side: 'below' | 'above', range: string) =>
     `${value} is ${side} what was expected (${range}).`,
+  measurandOutside: {
+    impossible: (label: string, value: string, side: 'below' | 'above', range: string) =>
+      `${label} comes to ${value}. That cannot be: it is ${side} what is possible (${range}).`,
+    unexpected: (label: string, value: string, side: 'below' | 'above', range: string) =>
+      `${label} comes to ${value}, ${side} what was expected (${range}).`
+  },
   slip: (meant: string, how: 'decimal' | 'inch' | 'swapped-digits') =>
     ({
       decimal: `A slip of the decimal sign? ${meant} would be expected.`,
