@@ -24,9 +24,14 @@ const GRID = Array.from({ length: 12 }, (_, i) => 10 ** (i - 3));
  */
 export function maximiseReml(problem: RemlProblem): RemlMaximum {
   let evaluations = 0;
+  const known = new Map<number, RemlPoint>();
   const at = (gamma: number): RemlPoint => {
-    evaluations++;
-    return evaluateReml(problem, gamma);
+    let point = known.get(gamma);
+    if (point === undefined) {
+      evaluations++;
+      known.set(gamma, (point = evaluateReml(problem, gamma)));
+    }
+    return point;
   };
   const zero = at(0);
   let best = zero;

@@ -16,6 +16,7 @@ const NEARLY = 0.15;
 /** What is not exact is tabulated with fewer digits: its own error is above 1e-7. */
 const COARSE = 1.5;
 const APPROXIMATE = 11;
+const BINS = 64;
 
 /** The largest of several correlated t statistics with one common error estimate. */
 export interface LargestT {
@@ -65,7 +66,9 @@ export function largestT(
       quantile: (alpha, df) => exact.quantile(alpha, df, start(alpha, df))
     };
   }
-  const product = remembered((c) => logOddsOf(largestOneFactor(c, loadings, sides, COARSE)));
+  // What the gathered loadings are off is part of the ratio that is tabulated around them.
+  const few = gathered(loadings);
+  const product = remembered((c) => logOddsOf(largestOneFactor(c, few, sides, COARSE)));
   const wide = { near: sides === 'two' ? 15 : 25, far: 5 };
   const orders = tailsAround(product, largestNearProduct(correlation, loadings, sides), 2, sides, wide);
   const approximate = (odds: LogOdds) => scaled((c) => 1 / (1 + Math.exp(-odds(c))), m, sides, APPROXIMATE);
@@ -95,6 +98,20 @@ export function largestT(
     },
     quantile: (alpha, df) => mean(replicates.map((r) => r.quantile(alpha, df, start(alpha, df))))
   };
+}
+
+/** Loadings in bins, each replaced by the mean of its bin: with many treatments a few different ones are left. */
+function gathered(loadings: Float64Array): Float64Array {
+  const bins = new Map<number, { sum: number; count: number }>();
+  const binOf = (loading: number) => Math.round(loading * BINS);
+  for (const loading of loadings) {
+    const bin = bins.get(binOf(loading)) ?? { sum: 0, count: 0 };
+    bins.set(binOf(loading), { sum: bin.sum + loading, count: bin.count + 1 });
+  }
+  return loadings.map((loading) => {
+    const { sum, count } = bins.get(binOf(loading))!;
+    return sum / count;
+  });
 }
 
 function remembered(odds: LogOdds): LogOdds {
