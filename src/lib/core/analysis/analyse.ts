@@ -25,7 +25,7 @@ import type { InputFault, Reason, Section } from './reason.ts';
 import { analyseRuined } from './ruined/analyse-ruined.ts';
 
 /** Name and version of the computation, stored with every result; a change of any number is a new version. */
-export const ALGORITHM = 'evenload-analysis/1';
+export const ALGORITHM = 'evenload-analysis/2';
 
 export type AnalysisStage =
   'design' | 'fixed' | 'random' | 'comparisons' | 'diagnostics' | 'ruined' | 'limits' | 'ranks' | 'answer';
