@@ -45,6 +45,7 @@ footer { margin-top: 2.5rem; padding-top: 0.6rem; border-top: 1px solid #c9c5b8;
   tr, dt, dd, li { break-inside: avoid; }
   p { orphans: 3; widows: 3; }
   caption { break-after: avoid; }
+  figure svg { max-height: 92mm; }
   table:not(:has(tbody tr:nth-child(19))) { break-inside: avoid; }
   .caution, .answer { print-color-adjust: exact; -webkit-print-color-adjust: exact; }
 }
