@@ -327,6 +327,40 @@ const measured = (id: string, label: string, unit: string, decimals: number) => 
   expected: { min: null, max: null }
 });
 
+test('limit: “≥ 10,000” is understood, asked about where it has two meanings, and kept as a limit', async ({
+  page,
+  app
+}) => {
+  const issued = plain({
+    readings: [cycles],
+    measurands: [measured('cycles', 'Cycles to break-through', '', 0)],
+    primary: null
+  });
+  await openBench(
+    page,
+    app.origin,
+    deskAt(issued, 1, 'stopped', () => () => null)
+  );
+  await expect(say(page)).toContainText('Track 1: enter cycles to break-through');
+  await enter(page, '≥ 10,000');
+  await expect(page.locator('.echo')).toContainText('This can be read in two ways');
+  await page.getByRole('button', { name: '≥ 10000', exact: true }).click();
+  await expect(say(page)).toContainText('Track 2');
+  await page.getByRole('button', { name: 'At least: the test stopped at this limit' }).click();
+  for (const key of '9000') await page.getByRole('button', { name: key, exact: true }).click();
+  await expect(page.locator('.echo')).toContainText('Understood: ≥ 9');
+  await act(page).click();
+  await expect(say(page)).toContainText('Track 3');
+  await enter(page, '8125');
+  await expect(say(page)).toContainText('Look over the readings');
+  await expect(page.locator('.check')).toContainText(/≥ 10,?000/);
+  expect((await recorded(page)).map(({ value, limit, raw }) => [value, limit, raw])).toEqual([
+    [8125, 'none', '8125'],
+    [9000, 'at-least', '≥9000'],
+    [10_000, 'at-least', '≥ 10,000']
+  ]);
+});
+
 test('repeats: each reading of a specimen is numbered, and their mean and scatter shown', async ({ page, app }) => {
   const gloss = { ...cycles, id: 'gloss', label: 'Gloss', decimals: 1, repeats: 3, mayStopAtLimit: false };
   const issued = plain({

@@ -1,12 +1,80 @@
+import { readFile } from 'node:fs/promises';
 import type { Page } from '@playwright/test';
 import type { DataOf } from '#lib/core/campaign/event.ts';
+import { readCampaignFile } from '#lib/core/exchange/read-campaign-file.ts';
 import { expect, test } from './app.ts';
-import { Desk, eventsOf, issuedPlan, openBench } from './bench-campaign.ts';
+import { Desk, enter, eventsOf, issuedPlan, openBench } from './bench-campaign.ts';
 import { recordSession } from './bench-record.ts';
 
 const say = (page: Page) => page.locator('.bench h1');
+const act = (page: Page) => page.locator('.bench .act button');
 const readings = async (page: Page): Promise<DataOf<'reading-recorded'>[]> =>
   (await eventsOf(page)).flatMap((event) => (event.kind === 'reading-recorded' ? [event.data] : []));
+
+test('without camera, detector, serial port, wake lock, vibration, share and file pickers a session is recorded and exported, and no dead button is shown', async ({
+  page,
+  app
+}) => {
+  await page.addInitScript(() => {
+    for (const name of ['BarcodeDetector', 'showSaveFilePicker', 'showOpenFilePicker', 'showDirectoryPicker'])
+      delete (globalThis as unknown as Record<string, unknown>)[name];
+    for (const name of ['serial', 'wakeLock', 'vibrate', 'share', 'canShare', 'mediaDevices'])
+      delete (Navigator.prototype as unknown as Record<string, unknown>)[name];
+  });
+  await openBench(page, app.origin, new Desk(issuedPlan({ conditions: [] })));
+  expect(
+    await page.evaluate(() =>
+      [
+        'BarcodeDetector' in globalThis,
+        'showSaveFilePicker' in globalThis,
+        'showDirectoryPicker' in globalThis,
+        'serial' in navigator,
+        'wakeLock' in navigator,
+        'vibrate' in navigator,
+        'share' in navigator,
+        'mediaDevices' in navigator
+      ].some(Boolean)
+    ),
+    'the device really has none of it'
+  ).toBe(false);
+  await act(page).click();
+  await expect(say(page)).toContainText('Put specimen');
+  await expect(page.getByRole('button', { name: 'Scan with the camera' })).toHaveCount(0);
+  for (const slot of [0, 1, 2]) {
+    await expect(say(page)).toContainText(`into Track ${slot + 1}`);
+    await act(page).click();
+  }
+  await page.getByRole('button', { name: 'Settings' }).click();
+  await expect(page.locator('dialog[open]')).toContainText('This browser cannot talk to serial ports.');
+  await expect(page.getByRole('button', { name: 'Connect a gauge' })).toHaveCount(0);
+  await page.keyboard.press('Escape');
+  for (const mass of ['44.2131', '45.3001', '43.9002']) await enter(page, mass);
+  await expect(say(page)).toContainText('All is loaded');
+  await act(page).click();
+  await expect(page.locator('.bench')).toContainText('This browser cannot keep the screen on.');
+  await act(page).click();
+  const early = page.locator('dialog[open]').getByRole('button', { name: 'Machine stopped by itself' });
+  if (await early.isVisible()) await early.click();
+  await expect(say(page)).toContainText('Track 1: enter panel mass after');
+  for (const mass of ['44.1831', '45.2601', '43.8502']) await enter(page, mass);
+  await expect(say(page)).toContainText('Look over the readings');
+  await act(page).click();
+  await page.locator('.strip .safe').click();
+  await expect(page.getByRole('heading', { level: 1 })).toContainText('End of shift');
+  await page.getByLabel('What should the next shift know?').fill('Track 1 runs a little warm.');
+  await page.getByRole('button', { name: 'Close shift 1' }).click();
+  await expect(page.getByText('Closed by Test person')).toBeVisible();
+  for (const name of [/share/i, /save the file|save instead/i, 'Choose a folder'])
+    await expect(page.getByRole('button', { name })).toHaveCount(0);
+  const [download] = await Promise.all([
+    page.waitForEvent('download'),
+    page.getByRole('button', { name: 'Export: download the file' }).click()
+  ]);
+  const file = readCampaignFile(new Uint8Array(await readFile(await download.path())));
+  expect(file.ok && file.value.damage).toBeNull();
+  expect(file.ok && file.value.events.filter(({ event }) => event.kind === 'reading-recorded')).toHaveLength(6);
+  await expect(page.getByText('Everything on this device is exported.')).toBeVisible();
+});
 
 test('a gauge on a serial port: stable lines become readings with the raw line kept, moving ones do not', async ({
   page,
