@@ -19,7 +19,7 @@ import { OpenCampaignCheckpoint } from './open-campaign-checkpoint.ts';
 import { OpenCampaignDrafts } from './open-campaign-drafts.svelte.ts';
 import { OpenCampaignLog } from './open-campaign-log.ts';
 import { OpenCampaignUnwritten } from './open-campaign-unwritten.svelte.ts';
-import { stampNow } from './surroundings.ts';
+import { newId, stampNow } from './surroundings.ts';
 import { type Role, WriterLock } from './writer-lock.ts';
 
 type Any = CampaignEvent | UnknownEvent;
@@ -33,6 +33,8 @@ const planDraft = 'plan';
 /** A campaign as it is open in this tab. State changes after the write has completed, never before. */
 export class OpenCampaign {
   readonly id: string;
+  /** Its word on the channel: what it wrote itself it need not read again. */
+  #self = newId();
   #log: OpenCampaignLog;
   #checkpoint: OpenCampaignCheckpoint;
   #state: CampaignState = $state.raw() as CampaignState;
@@ -57,7 +59,7 @@ export class OpenCampaign {
     this.#state = log.state;
     this.#whole = log.whole;
     this.#lock = new WriterLock(id, (role) => void this.#becomes(role));
-    this.#stopListening = whenOthersWrite(id, () => void this.#inTurn(() => this.#catchUp()));
+    this.#stopListening = whenOthersWrite(id, () => void this.#inTurn(() => this.#catchUp()), this.#self);
     this.#hold.look(this.#state);
   }
 
@@ -140,7 +142,7 @@ export class OpenCampaign {
     this.#show();
     this.#checkpoint.after(kind === 'session-closed' || kind === 'shift-closed');
     remember(device.id, summary, event.id, event.at, kind === 'exported');
-    tellOthers(this.id);
+    tellOthers(this.id, this.#self);
     await this.#reportFaults();
     return ok(event);
   }
