@@ -9,6 +9,7 @@ import type { Connection } from '#lib/storage/connection.ts';
 import type { StorageFault } from '#lib/storage/fault.ts';
 import { load, type LoadedLog } from '#lib/storage/journal.ts';
 import { takeIn } from '#lib/storage/take-in.ts';
+import { sumsOf } from './sums-of.ts';
 import type { ImportReply, ProposedFile, ReadFault, TakenFile, TakeFault, TakeOrder } from './import-messages.ts';
 
 type Any = CampaignEvent | UnknownEvent;
@@ -30,13 +31,14 @@ export class ImportJob {
   }
 
   async read(blob: Blob): Promise<Result<ProposedFile, ReadFault>> {
-    let bytes: Uint8Array;
+    let bytes: Uint8Array<ArrayBuffer>;
     try {
       bytes = new Uint8Array(await blob.arrayBuffer());
     } catch (cause) {
       return fail({ tag: 'unreadable-file', detail: String(cause) });
     }
-    const read = readCampaignFile(bytes, (done) => this.#say({ tag: 'progress', phase: 'reading', done }));
+    const sums = await sumsOf(bytes);
+    const read = readCampaignFile(bytes, (done) => this.#say({ tag: 'progress', phase: 'reading', done }), sums);
     if (!read.ok) return read;
     this.#file = read.value;
     this.#lines = new Map(read.value.events.map((one) => [one.event, one]));

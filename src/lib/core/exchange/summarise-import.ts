@@ -128,16 +128,20 @@ function countsOf<K extends string>(list: readonly { kind: K }[]): Counted<K>[] 
 }
 
 function sharesOf(added: readonly Any[]): DeviceShare[] {
-  const shares = new Map<string, DeviceShare>();
+  const shares = new Map<string, { share: DeviceShare; from: number; to: number }>();
   for (const { device, who, at } of added) {
-    const share = shares.get(device);
-    if (!share) shares.set(device, { device, who: [who], added: 1, first: at, last: at });
-    else {
-      share.added++;
-      if (!share.who.includes(who)) share.who.push(who);
-      if (Date.parse(at) < Date.parse(share.first)) share.first = at;
-      if (Date.parse(at) > Date.parse(share.last)) share.last = at;
+    const instant = Date.parse(at);
+    const found = shares.get(device);
+    if (!found) {
+      const share: DeviceShare = { device, who: [who], added: 1, first: at, last: at };
+      shares.set(device, { share, from: instant, to: instant });
+      continue;
     }
+    const { share } = found;
+    share.added++;
+    if (!share.who.includes(who)) share.who.push(who);
+    if (instant < found.from) [share.first, found.from] = [at, instant];
+    if (instant > found.to) [share.last, found.to] = [at, instant];
   }
-  return [...shares.values()];
+  return [...shares.values()].map(({ share }) => share);
 }
