@@ -29,18 +29,20 @@ export async function resultOf(
   return made.ok ? ok({ measurand, input, analysis: made.value }) : made;
 }
 
+/** The measurands of a plan, the primary first. */
+export function primaryFirst({ plan }: CampaignState): Measurand[] {
+  const primary = plan?.primary?.measurand;
+  return [...(plan?.measurands ?? [])].sort((a, b) => Number(b.id === primary) - Number(a.id === primary));
+}
+
 /** The analyses of all measurands that have one, the primary first; those without are left out with their fault. */
 export async function allResults(
   state: CampaignState,
   options: AnalysisOptions = {}
 ): Promise<{ results: MeasurandResult[]; faults: { measurand: Measurand; fault: ResultFault }[] }> {
-  const primary = state.plan?.primary?.measurand;
-  const measurands = [...(state.plan?.measurands ?? [])].sort(
-    (a, b) => Number(b.id === primary) - Number(a.id === primary)
-  );
   const results: MeasurandResult[] = [];
   const faults: { measurand: Measurand; fault: ResultFault }[] = [];
-  for (const measurand of measurands) {
+  for (const measurand of primaryFirst(state)) {
     const made = await resultOf(state, measurand, options);
     if (made.ok) results.push(made.value);
     else faults.push({ measurand, fault: made.error });

@@ -84,9 +84,26 @@ export const results: typeof en = {
   },
   several: {
     title: 'Mehrere Messgrößen',
-    caption: 'Bereinigte Mittelwerte jeder Messgröße, mit Buchstaben',
-    finding: (n) => `${n} Messgrößen sind geplant; jede hat ihre eigene Antwort.`,
-    compute: 'Alle nebeneinander rechnen'
+    caption: 'Jede Variante nach jeder Messgröße',
+    order: (first) => `Die beste zuerst nach: ${first}.`,
+    alone:
+      'Jede Messgröße wurde für sich ausgewertet: Buchstaben und Ränge gelten in ihren eigenen Spalten, keine Messgröße wurde gegen eine andere gewichtet.',
+    agree: (n, name) => `${n} Messgrößen; ${name} hat in jeder das beste bereinigte Mittel.`,
+    disagree: (n) => `${n} Messgrößen; sie setzen nicht dieselbe Variante an die erste Stelle.`,
+    each: (n) => `${n} Messgrößen; jede hat ihre eigene Antwort.`,
+    computing: (known, all) => `Bisher gerechnet: ${known} von ${all} Messgrößen.`,
+    mean: 'Bereinigtes Mittel',
+    letters: 'Buchstaben',
+    rank: 'Rang',
+    better: {
+      lower: 'niedriger ist besser',
+      higher: 'höher ist besser',
+      target: (value) => `am nächsten an ${value} ist am besten`
+    },
+    full: 'Ganzes Ergebnis',
+    fullOf: (what) => `Ganzes Ergebnis: ${what}`,
+    shown: 'auf dieser Seite gezeigt',
+    note: (what, why) => `${what}: ${why}`
   },
   runName: (treatment, session, slot) => `${treatment}, ${session}${slot === null ? '' : `, Platz ${slot}`}`,
   session: (number) => `Belegung ${number}`,

@@ -81,9 +81,26 @@ export const results = {
   },
   several: {
     title: 'Several measurands',
-    caption: 'Adjusted means of every measurand, with letters',
-    finding: (n: number) => `${n} measurands were planned; each has its own answer.`,
-    compute: 'Compute all side by side'
+    caption: 'Every treatment by every measurand',
+    order: (first: string) => `Best first by ${inSentence(first)}.`,
+    alone:
+      'Each measurand was analysed for itself: letters and ranks hold inside their own columns, and no measurand was weighed against another.',
+    agree: (n: string, name: string) => `${n} measurands; ${name} has the best adjusted mean in each.`,
+    disagree: (n: string) => `${n} measurands; they do not name the same treatment first.`,
+    each: (n: string) => `${n} measurands; each has its own answer.`,
+    computing: (known: string, all: string) => `Computed so far: ${known} of ${all} measurands.`,
+    mean: 'Adjusted mean',
+    letters: 'Letters',
+    rank: 'Rank',
+    better: {
+      lower: 'lower is better',
+      higher: 'higher is better',
+      target: (value: string) => `nearest to ${value} is best`
+    },
+    full: 'Full result',
+    fullOf: (what: string) => `Full result: ${inSentence(what)}`,
+    shown: 'shown on this page',
+    note: (what: string, why: string) => `${what}: ${why}`
   },
   runName: (treatment: string, session: string, slot: string | null) =>
     `${treatment}, ${session}${slot === null ? '' : `, slot ${slot}`}`,
