@@ -191,6 +191,16 @@ export const help: typeof en = {
       is: 'Die Streuung, die eine Schätzung bei Wiederholung der Kampagne zeigte.',
       why: 'Ein Unterschied zählt nur gemessen an seinem Standardfehler.'
     },
+    'standard-error-of-a-difference': {
+      term: 'Standardfehler eines Unterschieds',
+      is: 'Die Streuung, die der Unterschied zweier bereinigter Mittelwerte bei Wiederholung der Kampagne hätte.',
+      why: 'An ihm wird ein Unterschied gemessen. Er ist kleiner für Paare, die sich in vielen Belegungen trafen.'
+    },
+    'primary-analysis': {
+      term: 'Maßgebliche Auswertung',
+      is: 'Die Auswertung, die der Plan vor dem ersten Messwert festlegte: Messgröße, Vergleich und wie Belegungen behandelt werden.',
+      why: 'Für sie gilt die angegebene Irrtumswahrscheinlichkeit. Was nach dem Blick auf die Daten gewählt wird, lässt sich passend wählen.'
+    },
     interval: {
       term: 'Intervall',
       is: 'Ein Bereich, der in 95 von 100 solchen Kampagnen den wahren Wert enthält (bei Irrtumswahrscheinlichkeit 0,05).',

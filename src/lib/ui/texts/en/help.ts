@@ -192,6 +192,16 @@ export const help = {
       is: 'The scatter that an estimate would show if the campaign were repeated.',
       why: 'A difference counts only against its standard error.'
     },
+    'standard-error-of-a-difference': {
+      term: 'Standard error of a difference',
+      is: 'The scatter that the difference of two adjusted means would show if the campaign were repeated.',
+      why: 'A difference is judged against it. It is smaller for pairs that met in many sessions.'
+    },
+    'primary-analysis': {
+      term: 'Primary analysis',
+      is: 'The analysis that the plan fixed before the first reading: measurand, comparison, and how sessions are treated.',
+      why: 'It carries the stated error probability. What is chosen after seeing the data can be made to fit.'
+    },
     interval: {
       term: 'Interval',
       is: 'A range that holds the true value in 95 of 100 such campaigns (at error probability 0.05).',
