@@ -19,7 +19,7 @@ export class SeveralResults {
   #state = $state.raw<SeveralState>({ tag: 'nothing' });
   #running: AbortController | null = null;
   #record: CampaignState | null = null;
-  #known = new Map<string, MeasurandResult>();
+  #known: MeasurandResult[] = [];
 
   get state(): SeveralState {
     return this.#state;
@@ -36,21 +36,22 @@ export class SeveralResults {
       this.#state = { tag: 'nothing' };
       return;
     }
-    if (record !== this.#record) this.#known = new Map();
+    if (record !== this.#record) this.#known = [];
     this.#record = record;
-    this.#known.set(shown.measurand.id, shown);
+    const find = (id: string): MeasurandResult | undefined => this.#known.find((one) => one.measurand.id === id);
+    if (!find(shown.measurand.id)) this.#known.push(shown);
     const run = new AbortController();
     this.#running = run;
     const faults: MeasurandFault[] = [];
     for (const measurand of measurands) {
-      if (this.#known.has(measurand.id)) continue;
-      this.#state = { tag: 'computing', known: this.#known.size, all: measurands.length };
+      if (find(measurand.id)) continue;
+      this.#state = { tag: 'computing', known: this.#known.length, all: measurands.length };
       const made = await resultOf(record, measurand, { signal: run.signal });
       if (run.signal.aborted) return;
-      if (made.ok) this.#known.set(measurand.id, made.value);
+      if (made.ok) this.#known.push(made.value);
       else faults.push({ measurand, fault: made.error });
     }
-    const results = measurands.flatMap(({ id }) => this.#known.get(id) ?? []);
+    const results = measurands.flatMap(({ id }) => find(id) ?? []);
     this.#state = { tag: 'done', results, faults };
   }
 
