@@ -1,7 +1,8 @@
 import { spawnSync } from 'node:child_process';
-import { mkdirSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { dirname, join } from 'node:path';
+import Ajv from 'ajv';
 import { unzipSync } from 'fflate';
 import { describe, expect, test } from 'vitest';
 import { analyse } from '#lib/core/analysis/analyse.ts';
@@ -119,6 +120,28 @@ describe('makePackage(input)', () => {
       .filter((cells) => cells[5] !== '')
       .map((cells) => Number(cells[5]));
     [71.375, 72, 75, 71.625].forEach((mean, i) => expect(means[i]).toBeCloseTo(mean, 10));
+  });
+
+  test('the descriptor fits the published profiles, as a whole and table by table', () => {
+    // Source: profiles of Frictionless Data, from the npm package datapackage 1.1.10 (MIT), kept in test/reference/frictionless.
+    const ajv = new Ajv({ schemaId: 'id', meta: false, allErrors: true, unknownFormats: 'ignore', logger: false });
+    ajv.addMetaSchema(JSON.parse(readFileSync('node_modules/ajv/lib/refs/json-schema-draft-04.json', 'utf8')));
+    const profile = (name: string) =>
+      ajv.compile(JSON.parse(readFileSync(`test/reference/frictionless/${name}.json`, 'utf8')));
+    const [whole, table] = [profile('data-package'), profile('tabular-data-resource')];
+    const descriptor = JSON.parse(text('datapackage.json'));
+    whole(descriptor);
+    expect(whole.errors).toBeNull();
+    const tables = descriptor.resources.filter(({ type }: { type?: string }) => type === 'table');
+    expect(tables.length).toBeGreaterThan(5);
+    for (const resource of tables) {
+      table({ ...resource, profile: 'tabular-data-resource' });
+      expect(table.errors, resource.name).toBeNull();
+    }
+    expect(whole({ ...descriptor, resources: [] })).toBe(false);
+    expect(table({ ...tables[0], profile: 'tabular-data-resource', schema: { fields: [{ type: 'number' }] } })).toBe(
+      false
+    );
   });
 
   test('describes every file and column as the Data Package standard 2.0 asks', () => {
