@@ -103,6 +103,17 @@ test('a campaign of 12 sessions × 3 slots is recorded by keyboard alone at 1180
   await expectRecorded(page, acts, 'keyboard');
 });
 
+/** Where a finger would touch each key, by its name. */
+const keyCentres = (page: Page): Promise<Record<string, [number, number]>> =>
+  page.locator('.bench button').evaluateAll((buttons) =>
+    Object.fromEntries(
+      buttons.map((button) => {
+        const { x, y, width, height } = button.getBoundingClientRect();
+        return [button.getAttribute('aria-label') ?? button.textContent?.trim() ?? '', [x + width / 2, y + height / 2]];
+      })
+    )
+  );
+
 test('a campaign of 12 sessions × 3 slots is recorded by touch alone at 820×1180', async ({ browser, app }) => {
   test.setTimeout(240_000);
   const context = await browser.newContext({ viewport: { width: 820, height: 1180 }, hasTouch: true, locale: 'en-GB' });
@@ -113,8 +124,11 @@ test('a campaign of 12 sessions × 3 slots is recorded by touch alone at 820×11
     act: () => act.tap(),
     load: () => act.tap(),
     number: async (text) => {
-      for (const key of text)
-        await page.getByRole('button', { name: key === '.' ? 'Decimal sign' : key, exact: true }).tap();
+      const centres = await keyCentres(page);
+      for (const key of text) {
+        const [x, y] = centres[key === '.' ? 'Decimal sign' : key] ?? [0, 0];
+        await page.touchscreen.tap(x, y);
+      }
       await act.tap();
       return text.length + 1;
     }

@@ -50,6 +50,7 @@ test('a copy in a folder follows the record in two generations, waits for permis
   expect(begun?.text.split('\n').length, 'header, events, footer, last line end').toBe(desk.events.length + 3);
 
   await page.getByRole('link', { name: 'Back to the bench' }).click();
+  await expect(page.locator('.window input:focus')).toBeVisible();
   await enter(page, '44.2131');
   await expect.poll(() => newest(page)).toContain('44.2131');
   expect((await files(page)).map(({ name }) => name.replace(/^.*-\w{8}/u, ''))).toEqual(['.jsonl', '-before.jsonl']);
@@ -60,6 +61,7 @@ test('a copy in a folder follows the record in two generations, waits for permis
   await page.evaluate(() => localStorage.setItem('test permission', 'prompt'));
   await page.reload();
   await expect(safe).toContainText('copying paused');
+  await expect(page.locator('.window input:focus')).toBeVisible();
   await enter(page, '45.3001');
   await expect(page.locator('[data-saved]')).toContainText('45.3001 g, Track 2');
   expect(await newest(page)).not.toContain('45.3001');
