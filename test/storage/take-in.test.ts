@@ -81,6 +81,15 @@ describe('takeIn', () => {
     expect(kept.ok && kept.value.map(({ id }) => id)).toEqual([created.id]);
   });
 
+  it('takeIn(an event that cannot be added, among others) tells the first error and leaves nothing of them', async () => {
+    const { events } = new Recorder(deviceA).begin();
+    const [created, issued] = events;
+    if (!created || !issued) throw new Error('no events');
+    const twice = await taking([created, created, issued]);
+    expect(await takeIn(connection, twice)).toEqual({ ok: false, error: { tag: 'stale' } });
+    expect((await held()).events).toEqual([]);
+  });
+
   it('takeIn(events) that ends on the way leaves nothing of them', async () => {
     const a = new Recorder(deviceA).begin();
     for (let n = 0; n < 3_000; n++) a.record('noted', { about: 'shift', session: null, slot: null, text: `note ${n}` });

@@ -1,4 +1,4 @@
-import type { IDBPTransaction } from 'idb';
+import { type IDBPTransaction, unwrap } from 'idb';
 import type { CampaignEvent, UnknownEvent } from '#lib/core/campaign/event.ts';
 import type { Sealed } from '#lib/core/campaign/make-event.ts';
 import type { CampaignSummary } from '#lib/core/campaign/summary.ts';
@@ -80,27 +80,39 @@ async function write(tx: Transaction, taking: Taking, attempt: number, progress:
     throw new DOMException('the log has grown since the file was weighed', 'ConstraintError');
   const known = new Set(ids);
   const places = new Set(held.events.map(nameOf));
-  const quarantine = ({ id, text, seal }: StoredEvent): Promise<unknown> =>
-    tx.objectStore('quarantine').put({ campaign, id, text, seal, from, at: note.event.at });
-  const add = (one: Incoming): Promise<unknown> => {
+  const [store, kept] = [unwrap(events) as IDBObjectStore, unwrap(tx.objectStore('quarantine')) as IDBObjectStore];
+  const quarantine = ({ id, text, seal }: StoredEvent): IDBRequest =>
+    kept.put({ campaign, id, text, seal, from, at: note.event.at });
+  const add = (one: Incoming): IDBRequest => {
     const stored = storedOf(one);
     // The id is another campaign's, or that of a record which can no longer be read.
     if (known.has(stored.id)) return quarantine(stored);
     const place = nameOf(one.event);
     const [, device, seq] = stored.at;
-    if (places.has(place)) return events.add({ ...stored, at: [campaign, device, seq, stored.id] });
+    if (places.has(place)) return store.add({ ...stored, at: [campaign, device, seq, stored.id] });
     places.add(place);
-    return events.add(stored);
+    return store.add(stored);
   };
   for (let start = 0; start < added.length; start += batch) {
-    await Promise.all(added.slice(start, start + batch).map(add));
+    await allOf(added.slice(start, start + batch).map(add));
     progress(start / added.length);
   }
-  await Promise.all([
-    ...aside.map((one) => quarantine(storedOf(one))),
-    events.add(storedOf(note)),
-    tx.objectStore('campaigns').put(summary)
-  ]);
+  await allOf(aside.map((one) => quarantine(storedOf(one))));
+  await Promise.all([events.add(storedOf(note)), tx.objectStore('campaigns').put(summary)]);
+}
+
+/**
+ * Resolves when requests of one transaction have all been answered: they are answered in their order, so the last one
+ * says so without a promise for each. Rejects with the error of the first that failed; what fails after it only says that
+ * the transaction was aborted.
+ */
+function allOf(requests: readonly IDBRequest[]): Promise<void> {
+  return new Promise((resolve, reject) => {
+    const last = requests.at(-1);
+    if (!last) return resolve();
+    for (const one of requests) one.onerror = () => reject(one.error);
+    last.onsuccess = () => resolve();
+  });
 }
 
 const nameOf = ({ device, seq }: { device: string; seq: number }): string => `${device}/${seq}`;
