@@ -6,7 +6,8 @@ export default defineConfig({
   outputDir: 'test-results',
   fullyParallel: true,
   workers: 2,
-  retries: 0,
+  // A test that fails and then holds is reported as flaky, by name.
+  retries: 1,
   forbidOnly: true,
   timeout: 60_000,
   expect: { timeout: 10_000 },

@@ -18,6 +18,7 @@ async function walk(page: Page, origin: string, look: Look): Promise<void> {
   await look('who');
   await sheet.getByRole('textbox').fill('Test person');
   await sheet.getByRole('button', { name: 'Begin' }).click();
+  await expect(sheet).toBeHidden();
   await expect(say).toContainText('Before loading');
   await page.getByLabel('Room temperature').fill('27');
   await expect(page.locator('.conditions')).toContainText('above its window');
