@@ -6,6 +6,7 @@ import { noHash } from '#lib/core/campaign/seal.ts';
 import { balancedDesign } from '#lib/core/design/catalogue/balanced-design.ts';
 import { layOutPlan } from '#lib/core/design/lay-out-plan.ts';
 import { demoPlan } from '#lib/state/demo/demo-plan.ts';
+import { putEvents } from './put-events.ts';
 
 /** A campaign as another device planned it, to be recorded at the bench of a test. Invented. */
 export const benchCampaign = '019aa000-0000-7000-8000-0000000be4c4';
@@ -71,28 +72,7 @@ export class Desk {
 export async function openBench(page: Page, origin: string, desk: Desk, who = 'Test person'): Promise<void> {
   await page.goto(`${origin}/bench?c=${benchCampaign}`);
   await page.locator('[role=alert], .bench h1').first().waitFor();
-  const stored = desk.events.map(({ event, text, seal }) => ({
-    id: event.id,
-    campaign: event.campaign,
-    at: [event.campaign, event.device, event.seq, ''],
-    text,
-    seal
-  }));
-  await page.evaluate(
-    async ({ events, name }) => {
-      const db = await new Promise<IDBDatabase>((resolve, reject) => {
-        const request = indexedDB.open('evenload');
-        request.onsuccess = () => resolve(request.result);
-        request.onerror = () => reject(request.error ?? new Error('open'));
-      });
-      const tx = db.transaction(['events', 'settings'], 'readwrite');
-      for (const event of events) tx.objectStore('events').put(event);
-      tx.objectStore('settings').put(name, 'who');
-      await new Promise((resolve) => (tx.oncomplete = resolve));
-      db.close();
-    },
-    { events: stored, name: who }
-  );
+  await putEvents(page, desk.events, who);
   await page.reload();
   await page.locator('.bench h1').waitFor();
 }

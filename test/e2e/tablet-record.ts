@@ -3,6 +3,7 @@ import type { DataOf, Kind } from '#lib/core/campaign/event.ts';
 import { type Head, makeEvent, type Sealed } from '#lib/core/campaign/make-event.ts';
 import type { IssuedPlan, PlannedSession } from '#lib/core/campaign/plan.ts';
 import { noHash } from '#lib/core/campaign/seal.ts';
+import { putEvents } from './put-events.ts';
 
 /** A tablet of a test: what a technician recorded on it, sealed as the bench would have sealed it. Invented. */
 export class TabletRecord {
@@ -66,27 +67,6 @@ export class TabletRecord {
 
   /** Puts the events into the database of the page's device. */
   async store(page: Page): Promise<void> {
-    const stored = this.sealed.map(({ event, text, seal }) => ({
-      id: event.id,
-      campaign: event.campaign,
-      place: `${event.campaign}/${event.device}/${event.seq}`,
-      text,
-      seal
-    }));
-    await page.evaluate(
-      async ({ events, name }) => {
-        const db = await new Promise<IDBDatabase>((resolve, reject) => {
-          const request = indexedDB.open('evenload');
-          request.onsuccess = () => resolve(request.result);
-          request.onerror = () => reject(request.error ?? new Error('open'));
-        });
-        const tx = db.transaction(['events', 'settings'], 'readwrite');
-        for (const event of events) tx.objectStore('events').put(event);
-        tx.objectStore('settings').put(name, 'who');
-        await new Promise((resolve) => (tx.oncomplete = resolve));
-        db.close();
-      },
-      { events: stored, name: this.who }
-    );
+    await putEvents(page, this.sealed, this.who);
   }
 }

@@ -2,24 +2,7 @@ import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import type { RepairRequest } from '#lib/core/design/repair/plan-repair.ts';
 import { repairInWorker } from '#lib/workers/plan-repair.ts';
 import type { RepairReply } from '#lib/workers/plan-repair.worker.ts';
-
-/** A worker that says what the test tells it to. */
-class ToldWorker {
-  static last: ToldWorker;
-  onmessage: ((event: { data: RepairReply }) => void) | null = null;
-  onerror: ((event: { message: string }) => void) | null = null;
-  terminated = false;
-  asked: unknown = null;
-  constructor() {
-    ToldWorker.last = this;
-  }
-  postMessage(message: unknown): void {
-    this.asked = message;
-  }
-  terminate(): void {
-    this.terminated = true;
-  }
-}
+import { ToldWorker } from './told-worker.ts';
 
 beforeEach(() => vi.stubGlobal('Worker', ToldWorker));
 afterEach(() => vi.unstubAllGlobals());
@@ -31,7 +14,7 @@ describe('repairInWorker', () => {
   test('repairInWorker(request) hands the question over and the answer back, and ends the worker', async () => {
     const answer = repairInWorker(request);
     expect(ToldWorker.last.asked).toEqual(request);
-    ToldWorker.last.onmessage?.({ data: { ok: true, report } });
+    ToldWorker.last.say<RepairReply>({ ok: true, report });
     expect(await answer).toEqual({ ok: true, value: report });
     expect(ToldWorker.last.terminated).toBe(true);
   });

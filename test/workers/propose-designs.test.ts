@@ -3,27 +3,7 @@ import type { Progress } from '#lib/core/design/propose-types.ts';
 import { proposeInWorker } from '#lib/workers/propose-designs.ts';
 import type { ProposeReply } from '#lib/workers/propose-designs.worker.ts';
 import { request } from '../core/design/propose/request.ts';
-
-/** A worker that says what the test tells it to. */
-class ToldWorker {
-  static last: ToldWorker;
-  onmessage: ((event: { data: ProposeReply }) => void) | null = null;
-  onerror: ((event: { message: string }) => void) | null = null;
-  terminated = false;
-  asked: unknown = null;
-  constructor() {
-    ToldWorker.last = this;
-  }
-  postMessage(message: unknown): void {
-    this.asked = message;
-  }
-  terminate(): void {
-    this.terminated = true;
-  }
-  say(data: ProposeReply): void {
-    this.onmessage?.({ data });
-  }
-}
+import { ToldWorker } from './told-worker.ts';
 
 beforeEach(() => vi.stubGlobal('Worker', ToldWorker));
 afterEach(() => vi.unstubAllGlobals());
@@ -35,10 +15,10 @@ describe('proposeInWorker', () => {
     const onProgress = vi.fn();
     const answer = proposeInWorker(request(), { onProgress });
     expect(ToldWorker.last.asked).toEqual(request());
-    ToldWorker.last.say({ tag: 'progress', progress });
+    ToldWorker.last.say<ProposeReply>({ tag: 'progress', progress });
     expect(onProgress).toHaveBeenCalledWith(progress);
     const proposal = { choices: [], recommended: null, smallestBalanced: null, cancelled: false };
-    ToldWorker.last.say({ tag: 'answer', answer: { ok: true, value: proposal } });
+    ToldWorker.last.say<ProposeReply>({ tag: 'answer', answer: { ok: true, value: proposal } });
     expect(await answer).toEqual({ ok: true, value: proposal });
     expect(ToldWorker.last.terminated).toBe(true);
   });
@@ -46,7 +26,7 @@ describe('proposeInWorker', () => {
   test('proposeInWorker(request) aborted ends the worker and answers with the best so far within 100 ms', async () => {
     const stop = new AbortController();
     const answer = proposeInWorker(request(), { signal: stop.signal });
-    ToldWorker.last.say({ tag: 'progress', progress });
+    ToldWorker.last.say<ProposeReply>({ tag: 'progress', progress });
     const began = performance.now();
     stop.abort();
     const result = await answer;
@@ -67,7 +47,7 @@ describe('proposeInWorker', () => {
     ToldWorker.last.onerror?.({ message: 'no memory' });
     expect(await dead).toEqual({ ok: false, error: { tag: 'worker-died', detail: 'no memory' } });
     const broken = proposeInWorker(request(), {});
-    ToldWorker.last.say({ tag: 'broken', detail: 'Error: bug' });
+    ToldWorker.last.say<ProposeReply>({ tag: 'broken', detail: 'Error: bug' });
     expect(await broken).toEqual({ ok: false, error: { tag: 'worker-died', detail: 'Error: bug' } });
   });
 });

@@ -6,11 +6,8 @@ import Ajv from 'ajv';
 import { unzipSync } from 'fflate';
 import { describe, expect, test } from 'vitest';
 import { analyse } from '#lib/core/analysis/analyse.ts';
-import { makeEvent, type Head } from '#lib/core/campaign/make-event.ts';
-import type { CampaignEvent } from '#lib/core/campaign/event.ts';
 import { observationsOf } from '#lib/core/campaign/observations-of.ts';
 import { replay } from '#lib/core/campaign/replay.ts';
-import { noHash } from '#lib/core/campaign/seal.ts';
 import { csvText, neutralise } from '#lib/core/exchange/package/csv-text.ts';
 import { makePackage } from '#lib/core/exchange/package/make-package.ts';
 import { actsFromTable } from '#lib/core/exchange/readings-table/acts-from-table.ts';
@@ -18,6 +15,7 @@ import { guessColumns } from '#lib/core/exchange/readings-table/guess-columns.ts
 import { planFromTable } from '#lib/core/exchange/readings-table/plan-from-table.ts';
 import { readDelimited } from '#lib/core/exchange/readings-table/read-delimited.ts';
 import { analysisInput } from '#lib/state/analysis-input.ts';
+import { sealedActs } from '../../campaign/sealed-acts.ts';
 
 /** Published: D.C. Montgomery, Design and Analysis of Experiments, catalysts and batches; one ruined row is added. */
 const table = `catalyst;batch;time;ruined
@@ -49,29 +47,7 @@ function packaged(): Uint8Array {
   };
   const made = planFromTable(read.value, guessColumns(read.value), question);
   if (!made.ok) throw new Error(JSON.stringify(made.error));
-  let head: Head = {
-    campaign: '019aa000-0000-7000-8000-000000000001',
-    device: '019aa000-0000-7000-8000-000000000002',
-    seq: 0,
-    hash: noHash,
-    tick: 0
-  };
-  const events: CampaignEvent[] = [];
-  for (const act of actsFromTable(made.value)) {
-    const stamp = {
-      now: 1e12,
-      offset: 0,
-      mono: 0,
-      run: 'r',
-      app: 'test',
-      random: new Uint8Array(10).fill(events.length)
-    };
-    const sealed = makeEvent({ ...act, who: 'Tester' } as Parameters<typeof makeEvent>[0], head, stamp);
-    if (!sealed.ok) throw new Error(JSON.stringify(sealed.error));
-    head = sealed.value.head;
-    events.push(sealed.value.event);
-  }
-  const state = replay(events);
+  const state = replay(sealedActs(actsFromTable(made.value)));
   const measurand = state.plan!.measurands[0]!;
   const input = analysisInput(
     state,

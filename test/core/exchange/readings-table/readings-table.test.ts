@@ -1,15 +1,13 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { makeEvent, type Head } from '#lib/core/campaign/make-event.ts';
 import { observationsOf } from '#lib/core/campaign/observations-of.ts';
 import { replay } from '#lib/core/campaign/replay.ts';
-import { noHash } from '#lib/core/campaign/seal.ts';
-import type { CampaignEvent } from '#lib/core/campaign/event.ts';
 import { actsFromTable } from '#lib/core/exchange/readings-table/acts-from-table.ts';
 import { guessColumns } from '#lib/core/exchange/readings-table/guess-columns.ts';
 import { planFromTable, type TableQuestion } from '#lib/core/exchange/readings-table/plan-from-table.ts';
 import { readDelimited } from '#lib/core/exchange/readings-table/read-delimited.ts';
 import { readNumber } from '#lib/core/exchange/readings-table/read-number.ts';
+import { sealedActs } from '../../campaign/sealed-acts.ts';
 
 /** Published: D.C. Montgomery, Design and Analysis of Experiments, catalysts and batches (response: reaction time, minutes). */
 export const catalyst = `catalyst;batch;time
@@ -168,28 +166,7 @@ describe('actsFromTable(campaign)', () => {
   test('makes events that the schema accepts and whose replay gives the readings of the file', () => {
     const made = campaignOf(catalyst);
     if (!made.ok) throw new Error('no campaign');
-    let head: Head = {
-      campaign: '019aa000-0000-7000-8000-000000000001',
-      device: '019aa000-0000-7000-8000-000000000002',
-      seq: 0,
-      hash: noHash,
-      tick: 0
-    };
-    const events: CampaignEvent[] = [];
-    for (const act of actsFromTable(made.value)) {
-      const stamp = {
-        now: 1e12,
-        offset: 0,
-        mono: 0,
-        run: 'r',
-        app: 'test',
-        random: new Uint8Array(10).map(() => events.length)
-      };
-      const sealed = makeEvent({ ...act, who: 'Tester' } as Parameters<typeof makeEvent>[0], head, stamp);
-      if (!sealed.ok) throw new Error(JSON.stringify(sealed.error));
-      head = sealed.value.head;
-      events.push(sealed.value.event);
-    }
+    const events = sealedActs(actsFromTable(made.value));
     const state = replay(events);
     expect(state.contradictions).toEqual([]);
     expect(state.sessions.map((s) => s.status)).toEqual(Array(4).fill('closed'));
